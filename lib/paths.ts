@@ -1,0 +1,23 @@
+/** Every URL of the application, written once. */
+export const paths = {
+  home: () => '/',
+  signIn: (next?: string) => (next ? `/sign-in?next=${encodeURIComponent(next)}` : '/sign-in'),
+  signUp: () => '/sign-up',
+  forgot: () => '/forgot',
+  reset: (token: string) => `/reset/${encodeURIComponent(token)}`,
+  invitation: (token: string) => `/invitation/${encodeURIComponent(token)}`,
+  desk: () => '/desk',
+  projects: () => '/projects',
+  newProject: () => '/projects/new',
+  project: (projectId: string) => `/projects/${projectId}`,
+  newSection: (projectId: string) => `/projects/${projectId}/sections/new`,
+  section: (projectId: string, sectionId: string) => `/projects/${projectId}/sections/${sectionId}`,
+  practice: () => '/practice',
+  people: () => '/practice/people',
+  criteria: () => '/practice/criteria',
+  materials: () => '/practice/materials',
+  tokens: () => '/practice/tokens',
+  auditLog: () => '/practice/log',
+  account: () => '/account',
+  apiReference: () => '/api-reference',
+} as const;

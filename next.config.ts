@@ -1,0 +1,16 @@
+import type { NextConfig } from 'next';
+
+const nextConfig: NextConfig = {
+  poweredByHeader: false,
+  // next dev otherwise prints every server action's arguments, passwords included
+  logging: { serverFunctions: false },
+  // types are a step of their own (npm run typecheck), faster than inside the build
+  typescript: { ignoreBuildErrors: true },
+  // pinned: Next guesses a parent folder when it finds another lockfile above
+  turbopack: { root: import.meta.dirname },
+  outputFileTracingRoot: import.meta.dirname,
+  // start their own threads from files on disk, so the bundler must leave them alone
+  serverExternalPackages: ['piscina'],
+};
+
+export default nextConfig;
