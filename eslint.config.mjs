@@ -17,7 +17,14 @@ const layers = {
   'lib/server': ['app', 'components', 'tests'],
   'lib/auth': ['app', 'components', 'lib/analysis', 'lib/checks', 'solver', 'tests'],
   'components/ui': ['app', 'components/!(ui)', 'lib/!(cn*)', 'db', 'solver', 'tests'],
-  'components/editor/kernels': ['app', 'components/!(editor)', 'components/editor/!(kernels)', 'lib/!(domain)', 'db', 'tests'],
+  'components/editor/kernels': [
+    'app',
+    'components/!(editor)',
+    'components/editor/!(kernels)',
+    'lib/!(domain)',
+    'db',
+    'tests',
+  ],
   components: ['app', 'lib/server', 'lib/auth', 'db', 'tests', 'scripts'],
   app: ['db', 'tests', 'scripts'],
 };
@@ -46,7 +53,18 @@ const host = [
 ];
 
 export default tseslint.config(
-  { ignores: ['node_modules', '.next', '.data', 'dist', 'db/migrations', 'next-env.d.ts', 'test-results', 'playwright-report'] },
+  {
+    ignores: [
+      'node_modules',
+      '.next',
+      '.data',
+      'dist',
+      'db/migrations',
+      'next-env.d.ts',
+      'test-results',
+      'playwright-report',
+    ],
+  },
   ...nextVitals,
   {
     files: ['**/*.{ts,tsx}'],
@@ -89,7 +107,11 @@ export default tseslint.config(
     rules: {
       'no-restricted-imports': [
         'error',
-        { patterns: [{ group: ['@/solver/*', '!@/solver/hosts'], message: "Import the solver from '@/solver'." }] },
+        {
+          patterns: [
+            { group: ['@/solver/*', '!@/solver/hosts'], message: "Import the solver from '@/solver'." },
+          ],
+        },
       ],
     },
   },
@@ -100,13 +122,22 @@ export default tseslint.config(
     rules: {
       '@typescript-eslint/no-restricted-imports': [
         'error',
-        { paths: ['lucia', '@lucia-auth/adapter-drizzle'].map((name) => ({ name, message: 'Only lib/auth knows lucia.' })) },
+        {
+          paths: ['lucia', '@lucia-auth/adapter-drizzle'].map((name) => ({
+            name,
+            message: 'Only lib/auth knows lucia.',
+          })),
+        },
       ],
     },
   },
   {
     // The solver core and the domain know no host: no DOM, no Node, no clock, no chance.
-    files: ['solver/**/*.ts', 'lib/{domain,checks,hand-methods}/**/*.ts', 'components/editor/kernels/**/*.ts'],
+    files: [
+      'solver/**/*.ts',
+      'lib/{domain,checks,hand-methods}/**/*.ts',
+      'components/editor/kernels/**/*.ts',
+    ],
     ignores: ['solver/hosts/**', '**/*.test.ts'],
     plugins: { jsdoc },
     settings: { jsdoc: { mode: 'typescript' } },
@@ -125,7 +156,10 @@ export default tseslint.config(
           message: 'Throw a coded error (errors.ts), not a bare Error.',
         },
       ],
-      'jsdoc/require-jsdoc': ['error', { publicOnly: true, require: { FunctionDeclaration: true, ClassDeclaration: true } }],
+      'jsdoc/require-jsdoc': [
+        'error',
+        { publicOnly: true, require: { FunctionDeclaration: true, ClassDeclaration: true } },
+      ],
       'jsdoc/require-param': ['error', { checkDestructured: false }],
       'jsdoc/check-param-names': ['error', { checkDestructured: false }],
       'jsdoc/require-returns': 'error',
@@ -141,7 +175,10 @@ export default tseslint.config(
         'error',
         {
           patterns: [
-            { group: ['node:*', 'react', 'react-dom', 'next', 'next/*', 'zod', '@/*'], message: 'solver/ imports only itself.' },
+            {
+              group: ['node:*', 'react', 'react-dom', 'next', 'next/*', 'zod', '@/*'],
+              message: 'solver/ imports only itself.',
+            },
           ],
         },
       ],
