@@ -70,7 +70,7 @@ export function WallFigure({ className }: { className?: string }) {
           key={colour}
           d={`M${[...headLine(band / drops), ...headLine((band + 1) / drops).reverse()].join('L')}Z`}
           fill={colour}
-          fillOpacity="0.8"
+          fillOpacity="0.7"
         />
       ))}
       <rect x="0" y={centre.y} width="1440" height="460" fill="url(#wall-figure-sand)" />

@@ -69,16 +69,16 @@ export const newSectionForm = z.object({
   projectId: identifier,
   /** The section document as JSON text; read and checked on the server by `parseSectionText`. */
   text: z.string().min(1, 'Paste a section document, or choose a file.'),
-  /** True for a starting point as shipped: "yours to replace". */
-  untouched: z.boolean().default(false),
 });
+
+export const beginSectionForm = z.object({ projectId: identifier, startingPoint: identifier });
 
 export const inviteForm = z.object({ email: emailSchema, role: z.enum(practiceRoles, 'Choose a role.') });
 export const roleForm = z.object({ userId: identifier, role: z.enum(practiceRoles, 'Choose a role.') });
 export const personForm = z.object({ userId: identifier });
 export const identifierForm = z.object({ id: identifier });
 
-/** A number as a person writes it: `1.5`, `1,5`, `3e-5`. */
+// A number as a person writes it: 1.5 or 1,5 or 3e-5.
 const typedNumber = (what: string) =>
   z
     .string()
