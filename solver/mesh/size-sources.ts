@@ -1,0 +1,140 @@
+// Where small elements are wanted: corners by the strength of their singularity, thin layers by their thickness.
+import { distanceToSegment } from '../geometry/segments';
+import type { Ground } from './ground';
+import type { SizeSource } from './size-field';
+
+/** Size at a square-root singularity relative to the distance to the next feature. */
+const tipRatio = 1 / 150;
+
+/**
+ * Lists the places that want small elements at size factor 1.
+ *
+ * @param ground - The ground.
+ * @param ceiling - Largest size anywhere, metres.
+ * @returns Sources; sizes in metres.
+ */
+export function listSizeSources(ground: Ground, ceiling: number): SizeSource[] {
+  return [...listCornerSources(ground, ceiling), ...listThinSources(ground, ceiling)];
+}
+
+/** One way out of a vertex along a segment. */
+interface Spoke {
+  readonly segment: number;
+  readonly to: number;
+  readonly angle: number;
+  /** Materials anticlockwise after the spoke and before it. */
+  readonly after: number;
+  readonly before: number;
+  /** What holds along it: an edge's index, 1e6 + a drain's, −1 on a closed side, −2 on a mere change of material. */
+  readonly condition: number;
+}
+
+function listSpokes(ground: Ground): Spoke[][] {
+  const spokes: Spoke[][] = ground.x.map(() => []);
+  ground.starts.forEach((a, segment) => {
+    const b = ground.ends[segment];
+    const inner = ground.left[segment] >= 0 && ground.right[segment] >= 0;
+    const drain = ground.drainOn[segment];
+    let condition = inner && ground.barrierOn[segment] < 0 ? -2 : ground.edgeOn[segment];
+    if (drain >= 0) condition = 1e6 + drain;
+    const [left, right] = [ground.left[segment], ground.right[segment]];
+    const angle = Math.atan2(ground.y[b] - ground.y[a], ground.x[b] - ground.x[a]);
+    const back = Math.atan2(ground.y[a] - ground.y[b], ground.x[a] - ground.x[b]);
+    spokes[a].push({ segment, to: b, angle, after: left, before: right, condition });
+    spokes[b].push({ segment, to: a, angle: back, after: right, before: left, condition });
+  });
+  for (const list of spokes) list.sort((p, q) => p.angle - q.angle || p.to - q.to);
+  return spokes;
+}
+
+function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
+  const all = listSpokes(ground);
+  const sources: SizeSource[] = [];
+  all.forEach((spokes, v) => {
+    const exponent = findExponent(spokes);
+    if (exponent === null) return;
+    const reach = Math.min(measureRoom(ground, all, v), 3 * ceiling);
+    // Energy missed within r of a corner goes as r^(2 exponent): equal shares give each corner its size.
+    const ratio = Math.max(Math.pow(tipRatio, 0.5 / exponent), 1 / 1500);
+    sources.push({ x: ground.x[v], y: ground.y[v], size: reach * ratio });
+  });
+  return sources;
+}
+
+/**
+ * The least exponent of the head, r^exponent, over the sectors of ground round a vertex; null where nothing there
+ * wants small elements. Homogeneous isotropic sectors: pi/angle between like sides, half that between unlike ones
+ * (closed form, e.g. Strang and Fix 1973, section 8.1); less where materials change within the sector.
+ */
+function findExponent(spokes: readonly Spoke[]): number | null {
+  const bounds = spokes.map((_, i) => i).filter((i) => spokes[i].condition !== -2);
+  if (spokes.length === 0) return null;
+  if (bounds.length === 0) return interfaceExponent(spokes);
+  let least = Infinity;
+  bounds.forEach((i, k) => {
+    const from = spokes[i];
+    if (from.after < 0) return;
+    const j = bounds[(k + 1) % bounds.length];
+    const to = spokes[j];
+    let angle = to.angle - from.angle;
+    if (angle <= 0) angle += 2 * Math.PI;
+    const inner = (j - i - 1 + spokes.length) % spokes.length;
+    const alike = from.condition === to.condition;
+    let exponent = (alike ? 1 : 0.5) * (Math.PI / angle);
+    if (inner > 0 && Math.abs(exponent - 1) > 0.02) exponent *= 0.8;
+    const foot = !alike && exponent > 0.95 && exponent < 1.05; // regular, but gradients are read here
+    if (exponent < 0.95) least = Math.min(least, exponent);
+    else if (foot) least = Math.min(least, 0.95);
+  });
+  return least === Infinity ? null : least;
+}
+
+/** Corner of a change of material: at worst that of a closed corner on its wide side. */
+function interfaceExponent(spokes: readonly Spoke[]): number | null {
+  let widest = 0;
+  for (let i = 0; i < spokes.length; i++) {
+    let angle = spokes[(i + 1) % spokes.length].angle - spokes[i].angle;
+    if (angle <= 0) angle += 2 * Math.PI;
+    widest = Math.max(widest, angle);
+  }
+  const exponent = Math.max(Math.PI / widest, spokes.length > 2 ? 0.6 : 0);
+  return exponent < 0.9 ? exponent : null;
+}
+
+/** Distance from a vertex to the next thing that is not a straight continuation of what meets there. */
+function measureRoom(ground: Ground, all: readonly Spoke[][], v: number): number {
+  const { x, y, starts, ends } = ground;
+  const own = new Set<number>();
+  let room = Infinity;
+  for (const spoke of all[v]) {
+    let at = v;
+    let step: Spoke | undefined = spoke;
+    while (step && !own.has(step.segment)) {
+      own.add(step.segment);
+      const { angle, to }: Spoke = step;
+      at = to;
+      step = all[at].find(
+        (next) => turnBetween(angle, next.angle) < 0.35 && next.condition === spoke.condition,
+      );
+    }
+    room = Math.min(room, Math.hypot(x[at] - x[v], y[at] - y[v]) || Infinity);
+  }
+  for (let s = 0; s < starts.length; s++) {
+    if (own.has(s)) continue;
+    const [a, b] = [starts[s], ends[s]];
+    if (a === v || b === v) continue;
+    room = Math.min(room, distanceToSegment(x[v], y[v], x[a], y[a], x[b], y[b]));
+  }
+  return room;
+}
+
+function turnBetween(from: number, to: number): number {
+  const turn = Math.abs(to - from) % (2 * Math.PI);
+  return Math.min(turn, 2 * Math.PI - turn);
+}
+
+function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
+  void ground;
+  void ceiling;
+  return [];
+}
