@@ -116,7 +116,7 @@ function segmentKey(a: number, b: number): number {
   return a < b ? a * 0x4000000 + b : b * 0x4000000 + a;
 }
 
-/** Unique pieces of all chains, by x of their left end. */
+// Unique pieces of all chains, by x of their left end.
 function listPieces(points: VertexIndex, chains: readonly Chain[]): { a: number[]; b: number[] } {
   const keys = new Set<number>();
   for (const { vertices } of chains) {
@@ -128,7 +128,7 @@ function listPieces(points: VertexIndex, chains: readonly Chain[]): { a: number[
   return { a: sorted.map((key) => Math.floor(key / 0x4000000)), b: sorted.map((key) => key % 0x4000000) };
 }
 
-/** Vertices to insert into each piece, by piece key; empty once nothing meets away from a vertex. */
+// Vertices to insert into each piece, by piece key; empty once nothing meets away from a vertex.
 function findCuts(points: VertexIndex, chains: readonly Chain[], snap: number): Map<number, number[]> {
   const { a, b } = listPieces(points, chains);
   const cuts = new Map<number, number[]>();
@@ -160,7 +160,7 @@ function findCuts(points: VertexIndex, chains: readonly Chain[], snap: number): 
   return cuts;
 }
 
-/** Cuts pieces at vertices that lie on them. */
+// Cuts pieces at vertices that lie on them.
 function cutAtVertices(
   { x, y }: VertexIndex,
   a: readonly number[],
@@ -194,7 +194,7 @@ function lowerBound(sorted: readonly number[], value: number): number {
   return low;
 }
 
-/** The vertex where segments a–b and c–d cross within both, or −1. */
+// The vertex where segments a–b and c–d cross within both, or −1.
 function findCrossing(points: VertexIndex, a: number, b: number, c: number, d: number): number {
   const { x, y } = points;
   const c1 = orient(x[a], y[a], x[b], y[b], x[c], y[c]);
@@ -208,7 +208,7 @@ function findCrossing(points: VertexIndex, a: number, b: number, c: number, d: n
   return points.find(x[a] + t * (x[b] - x[a]), y[a] + t * (y[b] - y[a]));
 }
 
-/** Inserts the cuts into one chain, in order along each of its pieces. */
+// Inserts the cuts into one chain, in order along each of its pieces.
 function applyCuts({ x, y }: VertexIndex, chain: Chain, cuts: ReadonlyMap<number, number[]>): void {
   const vertices: number[] = [];
   const distances: number[] = [];

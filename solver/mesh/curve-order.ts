@@ -27,7 +27,7 @@ export function orderAlongCurve(x: ArrayLike<number>, y: ArrayLike<number>, coun
   return order.sort((a, b) => keys[a] - keys[b] || a - b);
 }
 
-/** Place of a cell along the curve of order 16. */
+// Place of a cell along the curve of order 16.
 function hilbertKey(column: number, row: number): number {
   let key = 0;
   let c = column;

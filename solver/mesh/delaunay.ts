@@ -94,7 +94,7 @@ function recoverSegment(mesh: Triangulation, a: number, b: number, id: number): 
   return true;
 }
 
-/** Flips sides that cross a–b until none does (Sloan 1993, section 4). */
+// Flips sides that cross a–b until none does (Sloan 1993, section 4).
 function clearWay(mesh: Triangulation, a: number, b: number): boolean {
   const queue = listCrossings(mesh, a, b);
   if (!queue) return false;
@@ -127,7 +127,7 @@ function crosses({ x, y }: Triangulation, a: number, b: number, p: number, q: nu
   return left > 0 !== right > 0;
 }
 
-/** Sides between a and b, in order; null where a vertex lies on the way. */
+// Sides between a and b, in order; null where a vertex lies on the way.
 function listCrossings(mesh: Triangulation, a: number, b: number): [number, number][] | null {
   const { x, y, corners, neighbours } = mesh;
   const first = mesh.triangleAt[a];

@@ -74,7 +74,7 @@ export function prepareGround(geometry: SectionGeometry): GroundOutcome {
   return { ground: { ...graph, size, snap: arrangement.snap, mesh }, findings: [] };
 }
 
-/** Coordinates that are no numbers, no regions, no extent. */
+// Coordinates that are no numbers, no regions, no extent.
 function findUnusable(geometry: SectionGeometry, size: number): GeometryFinding[] {
   if (geometry.regions.length === 0) return [{ code: 'region-empty', at: [0, 0] }];
   const paths = [
@@ -116,7 +116,7 @@ interface Sides {
   readonly right: Int32Array;
 }
 
-/** Material on the two sides of each segment. */
+// Material on the two sides of each segment.
 function readSides(mesh: Triangulation, { starts, ends }: Arrangement): Sides {
   const left = new Int32Array(starts.length);
   const right = new Int32Array(starts.length);
@@ -134,7 +134,7 @@ const misplacedCodes: Record<string, GeometryFindingCode> = {
   base: 'base-off-outline',
 };
 
-/** Lines with a part where it cannot be; one finding a line, at the middle of its first such part. */
+// Lines with a part where it cannot be; one finding a line, at the middle of its first such part.
 function findMisplaced(
   { x, y, starts, ends, lines }: Arrangement,
   { left, right }: Sides,
@@ -161,7 +161,7 @@ function findMisplaced(
 
 type Graph = Omit<Ground, 'size' | 'snap' | 'mesh'>;
 
-/** Drops segments inside one material that carry no line, and vertices that no segment uses. */
+// Drops segments inside one material that carry no line, and vertices that no segment uses.
 function keepNeeded(arrangement: Arrangement, { left, right }: Sides, geometry: SectionGeometry): Graph {
   const count = arrangement.starts.length;
   const on = { barrier: new Array<number>(count).fill(-1), edge: [], drain: [] } as Record<string, number[]>;

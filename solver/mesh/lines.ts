@@ -86,7 +86,7 @@ class PieceFinder {
     this.#sides = sides;
   }
 
-  /** Pieces along a line: left of the path where ground, else right; both where asked. */
+  // Pieces along a line: left of the path where ground, else right; both where asked.
   along(line: ArrangedLine, both: (segment: number) => boolean): Piece[] {
     return line.segments.flatMap((s, i) => {
       if (s < 0) return [];
@@ -97,7 +97,7 @@ class PieceFinder {
     });
   }
 
-  /** Both faces of a barrier's inner parts; a part walked twice counts once. */
+  // Both faces of a barrier's inner parts; a part walked twice counts once.
   faces(line: ArrangedLine): BarrierSides {
     const { left, right, barrierOn } = this.#ground;
     const seen = new Set<number>();
@@ -111,7 +111,7 @@ class PieceFinder {
     return { left: face('left'), right: face('right') };
   }
 
-  /** Sides of the line's i-th segment that lie to one hand of the path. */
+  // Sides of the line's i-th segment that lie to one hand of the path.
   #face(line: ArrangedLine, i: number, hand: 'left' | 'right'): Piece[] {
     const { starts, ends, mesh } = this.#ground;
     const { cornerVertices } = this.#topology;
@@ -147,7 +147,7 @@ function packLine(pieces: readonly Piece[]): LineSides {
   };
 }
 
-/** The outline walked with the ground to the left, ring after ring; distances run on from ring to ring. */
+// The outline walked with the ground to the left, ring after ring; distances run on from ring to ring.
 function traceOutline(topology: Topology, ground: Ground): Piece[] {
   const { elementCount, cornerVertices, sideSegments } = topology;
   const { x, y } = ground.mesh;

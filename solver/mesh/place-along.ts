@@ -30,7 +30,7 @@ export function placeAlong(
   return [...(from > 0 ? [from] : []), ...inner, ...(to < 1 ? [to] : [])];
 }
 
-/** Splits [from, to] into pieces that each hold the same integral of 1/size. */
+// Splits [from, to] into pieces that each hold the same integral of 1/size.
 function spread(
   field: SizeField,
   [ax, ay, bx, by]: readonly [number, number, number, number],

@@ -72,7 +72,7 @@ class Refiner {
     }
   }
 
-  /** Inserts the places from the middle one outwards, so that cavities stay small. */
+  // Inserts the places from the middle one outwards, so that cavities stay small.
   #splitBetween(a: number, b: number, places: readonly number[], s: number): void {
     if (places.length === 0) return;
     const middle = places.length >> 1;
@@ -85,7 +85,7 @@ class Refiner {
     this.#splitBetween(v, b, places.slice(middle + 1), s);
   }
 
-  /** Radius of the first shell round a corner with a small angle. */
+  // Radius of the first shell round a corner with a small angle.
   #shellOf(v: number): number {
     const { x, y, starts, ends } = this.#ground;
     if (!this.#sharp[v]) return 0;
@@ -97,7 +97,7 @@ class Refiner {
     return room;
   }
 
-  /** Refines until nothing is left to do; false where the limit was hit. */
+  // Refines until nothing is left to do; false where the limit was hit.
   run(): boolean {
     const mesh = this.#mesh;
     this.#running = true;
@@ -111,7 +111,7 @@ class Refiner {
     return true;
   }
 
-  /** Queues a triangle that is too large or too narrow, shortest side first: the mesh grows out of its fine parts. */
+  // Queues a triangle that is too large or too narrow, shortest side first: the mesh grows out of its fine parts.
   #judge(t: number): void {
     const { x, y, corners } = this.#mesh;
     const [a, b, c] = [corners[3 * t], corners[3 * t + 1], corners[3 * t + 2]];
@@ -135,7 +135,7 @@ class Refiner {
     return !this.#isForced(t, shortest);
   }
 
-  /** Whether the shortest side spans two segments at equal distance from their common corner: the input's own angle. */
+  // Whether the shortest side spans two segments at equal distance from their common corner: the input's own angle.
   #isForced(t: number, shortest: number): boolean {
     const { x, y, corners } = this.#mesh;
     for (let s = 0; s < 3; s++) {
@@ -186,7 +186,7 @@ class Refiner {
     if (t < this.#mesh.triangleCount && this.#mesh.generations[t] === this.#queue.generation) this.#judge(t);
   }
 
-  /** The point that turns the triangle's shortest side into a good triangle of the wanted size. */
+  // The point that turns the triangle's shortest side into a good triangle of the wanted size.
   #propose(t: number): void {
     const { x, y, corners } = this.#mesh;
     let [p, q, r] = [corners[3 * t], corners[3 * t + 1], corners[3 * t + 2]];
@@ -215,7 +215,7 @@ class Refiner {
     this.#py = my + uy * scale;
   }
 
-  /** Ends of the cavity's segments that see the vertex under more than 120 degrees. */
+  // Ends of the cavity's segments that see the vertex under more than 120 degrees.
   #listEncroached(v: number): number[] {
     const { rim, rimCount, x, y } = this.#mesh;
     const found: number[] = [];
@@ -236,7 +236,7 @@ class Refiner {
     return this.#splitEdgeMiddle(a, b);
   }
 
-  /** Halves an edge of a segment; next to a sharp corner at a power of two from it, so that neighbours keep step. */
+  // Halves an edge of a segment; next to a sharp corner at a power of two from it, so that neighbours keep step.
   #splitEdgeMiddle(a: number, b: number): boolean {
     const { x, y } = this.#mesh;
     const length = Math.sqrt(squaredLength(x, y, a, b));
@@ -287,7 +287,7 @@ function commonEnd({ starts, ends }: Ground, p: number, q: number): number {
   return -1;
 }
 
-/** Marks corners where two segments with ground between them meet at less than 60 degrees. */
+// Marks corners where two segments with ground between them meet at less than 60 degrees.
 function findSharpCorners({ x, y, starts, ends }: Ground): Uint8Array {
   const sharp = new Uint8Array(x.length);
   const angles: number[][] = x.map(() => []);

@@ -37,7 +37,7 @@ export class SizeField {
     if (kept.length > 0) this.#build(0, kept.length);
   }
 
-  /** Sorts sources first to end into a box and its two halves. */
+  // Sorts sources first to end into a box and its two halves.
   #build(first: number, end: number): void {
     const at = this.#boxes.length;
     const xs = this.#x.subarray(first, end);
@@ -101,7 +101,7 @@ export class SizeField {
   }
 }
 
-/** Keeps sources that lower the field of the finer ones; finest first, ties in input order. */
+// Keeps sources that lower the field of the finer ones; finest first, ties in input order.
 function dropMet(sources: readonly SizeSource[], slope: number, ceiling: number): SizeSource[] {
   const order = sources.map((_, i) => i).sort((a, b) => sources[a].size - sources[b].size || a - b);
   const kept: SizeSource[] = [];

@@ -61,11 +61,9 @@ function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
   return sources;
 }
 
-/**
- * The least exponent of the head, r^exponent, over the sectors of ground round a vertex; null where nothing there
- * wants small elements. Homogeneous isotropic sectors: pi/angle between like sides, half that between unlike ones
- * (closed form, e.g. Strang and Fix 1973, section 8.1); less where materials change within the sector.
- */
+// The least exponent of the head, r^exponent, over the sectors of ground round a vertex; null where nothing there
+// wants small elements. Homogeneous isotropic sectors: pi/angle between like sides, half that between unlike ones
+// (closed form, e.g. Strang and Fix 1973, section 8.1); less where materials change within the sector.
 function findExponent(spokes: readonly Spoke[]): number | null {
   const bounds = spokes.map((_, i) => i).filter((i) => spokes[i].condition !== -2);
   if (spokes.length === 0) return null;
@@ -89,7 +87,7 @@ function findExponent(spokes: readonly Spoke[]): number | null {
   return least === Infinity ? null : least;
 }
 
-/** Corner of a change of material: at worst that of a closed corner on its wide side. */
+// Corner of a change of material: at worst that of a closed corner on its wide side.
 function interfaceExponent(spokes: readonly Spoke[]): number | null {
   let widest = 0;
   for (let i = 0; i < spokes.length; i++) {
@@ -101,7 +99,7 @@ function interfaceExponent(spokes: readonly Spoke[]): number | null {
   return exponent < 0.9 ? exponent : null;
 }
 
-/** Distance from a vertex to the next thing that is not a straight continuation of what meets there. */
+// Distance from a vertex to the next thing that is not a straight continuation of what meets there.
 function measureRoom(ground: Ground, all: readonly Spoke[][], v: number): number {
   const { x, y, starts, ends } = ground;
   const own = new Set<number>();

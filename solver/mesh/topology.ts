@@ -89,7 +89,7 @@ function orderElements({ x, y, corners, triangleCount }: Triangulation): Int32Ar
   return orderAlongCurve(cx, cy, triangleCount);
 }
 
-/** Gives nodes to corners, fan by fan, and to sides. */
+// Gives nodes to corners, fan by fan, and to sides.
 function numberNodes(
   vertices: Int32Array,
   neighbours: Int32Array,

@@ -140,7 +140,7 @@ export class Triangulation {
     return this.#searchAll(px, py);
   }
 
-  /** Constrained triangulations can, in principle, send a walk in circles. */
+  // Constrained triangulations can, in principle, send a walk in circles.
   #searchAll(px: number, py: number): number {
     for (let t = 0; t < this.triangleCount; t++) {
       let inside = true;
@@ -226,7 +226,7 @@ export class Triangulation {
     this.rim[at + 5] = owner;
   }
 
-  /** The owner of a rim side that the vertex does not see, −1 where it sees all. */
+  // The owner of a rim side that the vertex does not see, −1 where it sees all.
   #findHiddenRim(v: number): number {
     const { x, y, rim } = this;
     for (let i = 0; i < this.rimCount; i++) {
@@ -292,7 +292,7 @@ export class Triangulation {
   #fills = 0;
 }
 
-/** The same array with twice the room. */
+// The same array with twice the room.
 function grow<T extends Float64Array | Int32Array>(array: T): T {
   const larger = new (array.constructor as new (length: number) => T)(2 * array.length);
   larger.set(array as never);
