@@ -2,10 +2,10 @@
 // a subset only where a page uses it. next/font reads these calls at build time: every argument must be a literal.
 import localFont from 'next/font/local';
 
-const commissioner = localFont({
-  src: '../node_modules/@fontsource-variable/commissioner/files/commissioner-latin-wght-normal.woff2',
-  variable: '--font-commissioner',
-  weight: '100 900',
+const sourceSans = localFont({
+  src: '../node_modules/@fontsource-variable/source-sans-3/files/source-sans-3-latin-wght-normal.woff2',
+  variable: '--font-source-sans',
+  weight: '200 900',
   display: 'swap',
   preload: true,
   adjustFontFallback: false,
@@ -17,10 +17,10 @@ const commissioner = localFont({
     },
   ],
 });
-const commissionerExt = localFont({
-  src: '../node_modules/@fontsource-variable/commissioner/files/commissioner-latin-ext-wght-normal.woff2',
-  variable: '--font-commissioner-ext',
-  weight: '100 900',
+const sourceSansExt = localFont({
+  src: '../node_modules/@fontsource-variable/source-sans-3/files/source-sans-3-latin-ext-wght-normal.woff2',
+  variable: '--font-source-sans-ext',
+  weight: '200 900',
   display: 'swap',
   preload: false,
   adjustFontFallback: false,
@@ -32,10 +32,10 @@ const commissionerExt = localFont({
     },
   ],
 });
-const commissionerGreek = localFont({
-  src: '../node_modules/@fontsource-variable/commissioner/files/commissioner-greek-wght-normal.woff2',
-  variable: '--font-commissioner-greek',
-  weight: '100 900',
+const sourceSansGreek = localFont({
+  src: '../node_modules/@fontsource-variable/source-sans-3/files/source-sans-3-greek-wght-normal.woff2',
+  variable: '--font-source-sans-greek',
+  weight: '200 900',
   display: 'swap',
   preload: false,
   adjustFontFallback: false,
@@ -93,9 +93,9 @@ const literataGreek = localFont({
 
 /** Class names that define the font variables used in globals.css. */
 export const fontVariables = [
-  commissioner,
-  commissionerExt,
-  commissionerGreek,
+  sourceSans,
+  sourceSansExt,
+  sourceSansGreek,
   literata,
   literataExt,
   literataGreek,
