@@ -13,8 +13,8 @@ import { buildTopology } from './topology';
 
 export type { GeometryFinding, GeometryFindingCode, LineKind, MeshOptions, MeshOutcome } from './outcome';
 
-/** Growth of the element size per metre of distance. */
-const slope = 0.3;
+/** Growth of the element size per metre of distance at size factor 1; it shrinks with the sizes, so that halving quarters. */
+const slope = 0.4;
 /** Largest element relative to the ground's mean thickness. */
 const ceilingRatio = 1 / 3;
 
@@ -48,7 +48,7 @@ function buildField(ground: Ground, { refineAt = [] }: MeshOptions, factor: numb
   const { area, width, height } = measureGround(ground);
   const ceiling = ceilingRatio * Math.min(area / width, area / height);
   const sources = listSizeSources(ground, ceiling).map(({ x, y, size }) => ({ x, y, size: size * factor }));
-  return new SizeField([...sources, ...refineAt], slope, ceiling * factor);
+  return new SizeField([...sources, ...refineAt], slope * Math.min(factor, 1.5), ceiling * factor);
 }
 
 function measureGround({ mesh }: Ground): { area: number; width: number; height: number } {

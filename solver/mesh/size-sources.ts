@@ -1,10 +1,17 @@
 // Where small elements are wanted: corners by the strength of their singularity, thin layers by their thickness.
 import { distanceToSegment } from '../geometry/segments';
+import { AcrossFinder } from './across-finder';
 import type { Ground } from './ground';
 import type { SizeSource } from './size-field';
 
 /** Size at a square-root singularity relative to the distance to the next feature. */
-const tipRatio = 1 / 150;
+const tipRatio = 1 / 1000;
+/** The same where gradients are read though the field is regular: a wall's foot at the surface. */
+const footRatio = 1 / 20;
+const leastRatio = 1 / 4000;
+const footExponent = 0.95;
+/** Elements across a thin layer. */
+const acrossCount = 2;
 
 /**
  * Lists the places that want small elements at size factor 1.
@@ -55,8 +62,8 @@ function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
     if (exponent === null) return;
     const reach = Math.min(measureRoom(ground, all, v), 3 * ceiling);
     // Energy missed within r of a corner goes as r^(2 exponent): equal shares give each corner its size.
-    const ratio = Math.max(Math.pow(tipRatio, 0.5 / exponent), 1 / 1500);
-    sources.push({ x: ground.x[v], y: ground.y[v], size: reach * ratio });
+    const ratio = exponent === footExponent ? footRatio : Math.pow(tipRatio, 0.5 / exponent);
+    sources.push({ x: ground.x[v], y: ground.y[v], size: reach * Math.max(ratio, leastRatio) });
   });
   return sources;
 }
@@ -81,8 +88,8 @@ function findExponent(spokes: readonly Spoke[]): number | null {
     let exponent = (alike ? 1 : 0.5) * (Math.PI / angle);
     if (inner > 0 && Math.abs(exponent - 1) > 0.02) exponent *= 0.8;
     const foot = !alike && exponent > 0.95 && exponent < 1.05; // regular, but gradients are read here
-    if (exponent < 0.95) least = Math.min(least, exponent);
-    else if (foot) least = Math.min(least, 0.95);
+    if (exponent < footExponent) least = Math.min(least, exponent);
+    else if (foot) least = Math.min(least, footExponent);
   });
   return least === Infinity ? null : least;
 }
@@ -131,8 +138,25 @@ function turnBetween(from: number, to: number): number {
   return Math.min(turn, 2 * Math.PI - turn);
 }
 
+// Places along segments where the ground across is thin: a layer, a lens, a gap under a wall.
 function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
-  void ground;
-  void ceiling;
-  return [];
+  const { x, y, starts, ends, left, right } = ground;
+  const sources: SizeSource[] = [];
+  const finder = new AcrossFinder(ground, acrossCount * ceiling);
+  for (let s = 0; s < starts.length; s++) {
+    const [a, b] = [starts[s], ends[s]];
+    const length = Math.hypot(x[b] - x[a], y[b] - y[a]);
+    for (const hand of [left[s] >= 0 ? 1 : 0, right[s] >= 0 ? -1 : 0]) {
+      if (hand === 0) continue;
+      for (let at = 0; at < length;) {
+        const px = x[a] + ((x[b] - x[a]) * at) / length;
+        const py = y[a] + ((y[b] - y[a]) * at) / length;
+        const width = finder.widthAt(s, hand, px, py);
+        const size = width / acrossCount;
+        if (size < ceiling) sources.push({ x: px, y: py, size });
+        at += Math.max(Math.min(width, length / 2), length / 2000);
+      }
+    }
+  }
+  return sources;
 }
