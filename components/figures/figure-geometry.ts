@@ -32,7 +32,8 @@ export function fitFigure(document: SectionDocument, width: number, maxHeight: n
   const vertical = Math.min(scale * exaggeration, (maxHeight - 2 * margin) / up);
   const shift = (width - across * scale) / 2;
   return {
-    height: Math.round(up * vertical + 2 * margin),
+    // a line of text under the ground says where heights are drawn larger than lengths
+    height: Math.round(up * vertical + 2 * margin) + (vertical > scale ? 12 : 0),
     exaggeration: Math.round((vertical / scale) * 10) / 10,
     place: ([x, y]) =>
       `${(shift + (x - left) * scale).toFixed(1)} ${(margin + (top - y) * vertical).toFixed(1)}`,

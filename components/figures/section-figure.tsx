@@ -102,7 +102,7 @@ export function SectionFigure({
         <path key={barrier.id} d={trace(barrier.path, frame)} strokeWidth="2.6" strokeLinecap="butt" />
       ))}
       {frame.exaggeration > 1 && (
-        <text x={width - 2} y={frame.height - 4} fontSize="10" textAnchor="end" fill="#55636f" stroke="none">
+        <text x={width - 6} y={frame.height - 3} fontSize="10" textAnchor="end" fill="#55636f" stroke="none">
           heights ×{frame.exaggeration}
         </text>
       )}

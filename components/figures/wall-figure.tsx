@@ -92,7 +92,7 @@ export function WallFigure({ className }: { className?: string }) {
           <path key={part} d={`M${headLine(part).join('L')}`} />
         ))}
       </g>
-      <g className="figures" fontSize="13" fill="#0a5247" textAnchor="middle">
+      <g className="figures" fontSize="15" fill="#0a5247" textAnchor="middle">
         {[0.8, 0.6, 0.5, 0.4, 0.2].map((part) => {
           const [x, y] = place(1.1, angleOf(part)).split(' ');
           return (

@@ -26,7 +26,7 @@ export function PublicHeader({ isSignedIn }: { isSignedIn: boolean }) {
             <Link href={paths.signIn()} className="text-link">
               Sign in
             </Link>
-            <Link href={paths.signUp()} className={buttonClass('plain')}>
+            <Link href={paths.signUp()} className={buttonClass('plain', 'max-sm:hidden')}>
               Set up a practice
             </Link>
           </>
@@ -39,14 +39,16 @@ export function PublicHeader({ isSignedIn }: { isSignedIn: boolean }) {
 /** The foot of the public pages. */
 export function PublicFooter() {
   return (
-    <footer className="mx-auto flex w-full max-w-page flex-wrap gap-x-6 gap-y-1 border-t border-rule px-4 py-6 text-sm text-secondary sm:px-8">
-      <p className="mr-auto">Underfall, seepage under and through hydraulic structures.</p>
-      <Link href={paths.apiReference()} className="text-link">
-        API reference
-      </Link>
-      <Link href={paths.signIn()} className="text-link">
-        Sign in
-      </Link>
+    <footer className="mx-auto w-full max-w-page px-4 sm:px-8">
+      <div className="flex flex-wrap gap-x-6 gap-y-1 border-t border-rule py-6 text-[0.9375rem] text-secondary">
+        <p className="mr-auto">Underfall, seepage under and through hydraulic structures.</p>
+        <Link href={paths.apiReference()} className="text-link">
+          API reference
+        </Link>
+        <Link href={paths.signIn()} className="text-link">
+          Sign in
+        </Link>
+      </div>
     </footer>
   );
 }

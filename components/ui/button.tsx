@@ -18,7 +18,7 @@ export type ButtonLook = keyof typeof looks;
 
 /** The class names of a button, for links that look like one. */
 export function buttonClass(look: ButtonLook = 'plain', className?: string): string {
-  const padding = look === 'quiet' ? 'min-h-6 px-0.5 py-0.5' : 'min-h-10 px-4 py-1.5';
+  const padding = look === 'quiet' ? 'min-h-6 px-0 py-0.5' : 'min-h-10 px-4 py-1.5';
   return cn(
     'rounded-control inline-flex items-center justify-center border text-center text-[0.9375rem] leading-tight font-medium transition-colors disabled:cursor-not-allowed',
     padding,

@@ -26,3 +26,18 @@ export function Select({ className, children, ...rest }: ComponentProps<'select'
     </select>
   );
 }
+
+/** A choice of one file. */
+export function FileInput({ className, ...rest }: ComponentProps<'input'>) {
+  return (
+    <input
+      {...useFieldProps()}
+      type="file"
+      className={cn(
+        'max-w-full text-[0.9375rem] file:mr-4 file:min-h-10 file:rounded-control file:border file:border-field file:bg-transparent file:px-4 file:font-medium',
+        className,
+      )}
+      {...rest}
+    />
+  );
+}
