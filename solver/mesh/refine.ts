@@ -17,6 +17,8 @@ const leastSine = Math.sin((25.5 * Math.PI) / 180);
 /** Off-centres make the new triangle's apex angle a little above the least angle. */
 const offCentreReach = 0.5 / Math.tan((29 * Math.PI) / 360);
 const sizeSlack = 1.25;
+/** Chord of 30 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
+const sharpChord = 2 * Math.sin(Math.PI / 12);
 
 /**
  * Refines the ground's triangulation in place.
@@ -148,7 +150,8 @@ class Refiner {
       if (apex < 0 || !this.#sharp[apex]) continue;
       const du = Math.sqrt(squaredLength(x, y, apex, u));
       const dv = Math.sqrt(squaredLength(x, y, apex, v));
-      if (Math.abs(du - dv) < 0.05 * Math.min(du, dv)) return true;
+      if (Math.abs(du - dv) > 0.05 * Math.min(du, dv)) continue;
+      if (shortest < sharpChord * sharpChord * du * dv) return true;
     }
     return false;
   }

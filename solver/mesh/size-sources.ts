@@ -11,7 +11,7 @@ const footRatio = 1 / 20;
 const leastRatio = 1 / 4000;
 const footExponent = 0.95;
 /** Elements across a thin layer. */
-const acrossCount = 2;
+const acrossCount = 1.25;
 
 /**
  * Lists the places that want small elements at size factor 1.
