@@ -4,9 +4,10 @@ import type { Ground } from './ground';
 import { prepareGround } from './ground';
 import { collectLines } from './lines';
 import type { Mesh } from './mesh';
-import type { GeometryFinding, MeshOptions, MeshOutcome } from './outcome';
+import type { MeshOptions, MeshOutcome } from './outcome';
 import { findMinAngle } from './quality';
 import { refineGround } from './refine';
+import type { SizeSource } from './size-field';
 import { SizeField } from './size-field';
 import { listSizeSources } from './size-sources';
 import { buildTopology } from './topology';
@@ -17,6 +18,7 @@ export type { GeometryFinding, GeometryFindingCode, LineKind, MeshOptions, MeshO
 const slope = 0.4;
 /** Largest element relative to the ground's mean thickness. */
 const ceilingRatio = 1 / 3;
+const maxAttempts = 10;
 
 /**
  * Meshes a section: arranges its lines, triangulates, refines towards singular points, splits nodes along barriers.
@@ -26,32 +28,55 @@ const ceilingRatio = 1 / 3;
  * @returns The mesh with remarks, or the findings that forbid one. Never throws, whatever the geometry.
  */
 export function buildMesh(geometry: SectionGeometry, options: MeshOptions): MeshOutcome {
+  const first = prepareGround(geometry);
+  if (!first.ground) return { status: 'refused', findings: first.findings };
+  const extent = measureGround(first.ground);
+  const sources = listSizeSources(first.ground, ceilingRatio * extent.thickness);
+  let ground: Ground | null = first.ground;
   let factor = options.sizeFactor;
-  for (let attempt = 0; attempt < 12; attempt++) {
-    const { ground, findings } = prepareGround(geometry);
-    if (!ground) return { status: 'refused', findings };
-    const field = buildField(ground, options, factor);
-    const floor = attempt < 4 ? ground.snap : Math.sqrt(measureGround(ground).area / options.maxElements);
+  for (let attempt = 0; attempt < maxAttempts && ground; attempt++) {
+    // Last, thin places keep their narrow triangles: better a poor mesh with a remark than none.
+    const floor =
+      attempt < 3
+        ? ground.snap
+        : 2 ** (attempt - 4) * Math.sqrt(extent.area / Math.max(options.maxElements, 1));
+    const field = buildField(sources, extent.thickness, { options, factor, floor });
     const refined = refineGround(ground, field, { maxTriangles: options.maxElements, floor });
-    if (!refined) {
-      factor *= 1.5;
-      continue;
+    if (refined.status === 'refined') {
+      const findings = [...first.findings];
+      if (attempt > 0)
+        findings.push({ code: 'element-limit', at: [ground.x[0], ground.y[0]], value: factor });
+      return { status: 'meshed', mesh: assembleMesh(ground, options.order), findings };
     }
-    const limited: GeometryFinding = { code: 'element-limit', at: [ground.x[0], ground.y[0]], value: factor };
-    const remarks = factor === options.sizeFactor ? findings : [...findings, limited];
-    return { status: 'meshed', mesh: assembleMesh(ground, options.order), findings: remarks };
+    const excess = Math.sqrt(refined.estimate / Math.max(options.maxElements, 1));
+    factor *= Math.min(Math.max(1.1 * excess, 1.2), 6);
+    ground = prepareGround(geometry).ground; // the refinement has used up the first
   }
   return { status: 'refused', findings: [{ code: 'too-fine', at: geometry.regions[0].outline[0] }] };
 }
 
-function buildField(ground: Ground, { refineAt = [] }: MeshOptions, factor: number): SizeField {
-  const { area, width, height } = measureGround(ground);
-  const ceiling = ceilingRatio * Math.min(area / width, area / height);
-  const sources = listSizeSources(ground, ceiling).map(({ x, y, size }) => ({ x, y, size: size * factor }));
-  return new SizeField([...sources, ...refineAt], slope * Math.min(factor, 1.5), ceiling * factor);
+interface Density {
+  readonly options: MeshOptions;
+  readonly factor: number;
+  readonly floor: number;
 }
 
-function measureGround({ mesh }: Ground): { area: number; width: number; height: number } {
+function buildField(
+  sources: readonly SizeSource[],
+  thickness: number,
+  { options, factor, floor }: Density,
+): SizeField {
+  const scaled = sources.map(({ x, y, size }) => ({ x, y, size: Math.max(size * factor, floor) }));
+  const asked = (options.refineAt ?? []).map(({ x, y, size }) => ({ x, y, size: Math.max(size, floor) }));
+  return new SizeField(
+    [...scaled, ...asked],
+    slope * Math.min(factor, 1.5),
+    ceilingRatio * thickness * factor,
+  );
+}
+
+// Area, metres squared, and mean thickness across the longer extent, metres.
+function measureGround({ mesh }: Ground): { area: number; thickness: number } {
   let area = 0;
   let [left, right, bottom, top] = [Infinity, -Infinity, Infinity, -Infinity];
   const { x, y, corners } = mesh;
@@ -65,7 +90,7 @@ function measureGround({ mesh }: Ground): { area: number; width: number; height:
       top = Math.max(top, y[v]);
     }
   }
-  return { area, width: right - left, height: top - bottom };
+  return { area, thickness: area / Math.max(right - left, top - bottom) };
 }
 
 function assembleMesh(ground: Ground, order: 1 | 2): Mesh {

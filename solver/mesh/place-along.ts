@@ -42,7 +42,7 @@ function spread(
   const places = [from];
   const sums = [0];
   for (let t = from, size = sizeAt(from); t < to;) {
-    const step = Math.min(size / 4, to - t);
+    const step = Math.min(size / 2, to - t);
     const next = t + step >= to ? to : t + step;
     const nextSize = sizeAt(next);
     sums.push(sums[sums.length - 1] + (next - t) * (0.5 / size + 0.5 / nextSize));

@@ -20,21 +20,31 @@ const sizeSlack = 1.25;
 /** Chord of 30 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
 const sharpChord = 2 * Math.sin(Math.PI / 12);
 
+/** The refined triangulation's vertices, or how many triangles it would have taken. */
+export type RefineOutcome =
+  /** Segment of each vertex inside a segment; −1 free, −2 a corner of the input. */
+  | { readonly status: 'refined'; readonly segmentOf: Int32Array }
+  | { readonly status: 'limit'; readonly estimate: number };
+
 /**
  * Refines the ground's triangulation in place.
  *
  * @param ground - The ground; its `mesh` is changed.
  * @param field - Wanted sizes.
  * @param limits - When to give up.
- * @returns Segment of each vertex inside a segment (−1 free, −2 a corner of the input), or null where the limit was hit.
+ * @returns What lies on which segment, or a rough estimate of the triangles wanted where the limit was hit.
  * @source J. Ruppert (1995), A Delaunay refinement algorithm for quality 2-dimensional mesh generation;
  *   A. Üngör (2004), Off-centers; S. Rebay (1993), Efficient unstructured mesh generation (size of the new triangle);
  *   G. L. Miller, S. E. Pav, N. J. Walkington (2003), When and why Delaunay refinement algorithms work (small angles).
  */
-export function refineGround(ground: Ground, field: SizeField, limits: RefineLimits): Int32Array | null {
+export function refineGround(ground: Ground, field: SizeField, limits: RefineLimits): RefineOutcome {
   const refiner = new Refiner(ground, field, limits);
-  refiner.splitSegments();
-  return refiner.run() ? Int32Array.from(refiner.segmentOf) : null;
+  const pieces = refiner.splitSegments();
+  if (pieces > limits.maxTriangles) return { status: 'limit', estimate: 2 * pieces };
+  const estimate = refiner.estimateCount();
+  if (estimate > 1.5 * limits.maxTriangles) return { status: 'limit', estimate };
+  if (!refiner.run()) return { status: 'limit', estimate: Math.max(estimate, 1.5 * limits.maxTriangles) };
+  return { status: 'refined', segmentOf: Int32Array.from(refiner.segmentOf) };
 }
 
 class Refiner {
@@ -59,19 +69,39 @@ class Refiner {
     this.#sharp = findSharpCorners(ground);
   }
 
-  /** Splits every segment to the size field, before any point goes inside. */
-  splitSegments(): void {
+  // Splits every segment to the size field, before any point goes inside; the number of pieces, alone where too many.
+  splitSegments(): number {
     const { x, y, starts, ends } = this.#ground;
-    for (let s = 0; s < starts.length; s++) {
-      const [a, b] = [starts[s], ends[s]];
-      const places = placeAlong(this.#field, [x[a], y[a], x[b], y[b]], {
+    let pieces = 0;
+    const places = starts.map((a, s) => {
+      if (pieces > this.#limits.maxTriangles) return [];
+      const b = ends[s];
+      const list = placeAlong(this.#field, [x[a], y[a], x[b], y[b]], {
         sharpStart: this.#sharp[a] === 1,
         sharpEnd: this.#sharp[b] === 1,
         shellStart: this.#shellOf(a),
         shellEnd: this.#shellOf(b),
       });
-      this.#splitBetween(a, b, places, s);
+      pieces += list.length + 1;
+      return list;
+    });
+    if (pieces <= this.#limits.maxTriangles) {
+      places.forEach((list, s) => this.#splitBetween(starts[s], ends[s], list, s));
     }
+    return pieces;
+  }
+
+  // Triangles the size field asks for: each triangle's area over that of an equilateral one of the wanted size.
+  estimateCount(): number {
+    const { x, y, corners, triangleCount } = this.#mesh;
+    let sum = 0;
+    for (let t = 0; t < triangleCount; t++) {
+      const [a, b, c] = [corners[3 * t], corners[3 * t + 1], corners[3 * t + 2]];
+      const area = ((x[b] - x[a]) * (y[c] - y[a]) - (y[b] - y[a]) * (x[c] - x[a])) / 2;
+      const size = this.#field.sizeAt((x[a] + x[b] + x[c]) / 3, (y[a] + y[b] + y[c]) / 3);
+      sum += 1 + area / (0.55 * size * size);
+    }
+    return sum;
   }
 
   // Inserts the places from the middle one outwards, so that cavities stay small.
@@ -125,7 +155,12 @@ class Refiner {
     const radius = Math.sqrt(ab * bc * ca) / (2 * area2);
     if (!(area2 > 0)) return;
     const size = this.#field.sizeAt((x[a] + x[b] + x[c]) / 3, (y[a] + y[b] + y[c]) / 3);
-    const large = radius * Math.sqrt(3) > sizeSlack * size;
+    // Where angles must stay, a flat triangle's circle says nothing of its size.
+    const extent =
+      shortest < this.#limits.floor * this.#limits.floor
+        ? Math.sqrt(Math.max(ab, bc, ca)) / 1.15
+        : radius * Math.sqrt(3);
+    const large = extent > sizeSlack * size;
     if (large || this.#isNarrow(t, shortest, radius)) {
       this.#queue.push(shortest, t, this.#mesh.generations[t]);
     }

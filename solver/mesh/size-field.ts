@@ -23,14 +23,14 @@ export class SizeField {
   /**
    * Builds the field.
    *
-   * @param sources - Where sizes are wanted; those already met by others are dropped.
+   * @param sources - Where sizes are wanted.
    * @param slope - Growth of the size per metre of distance.
    * @param ceiling - Largest size anywhere, metres.
    */
   constructor(sources: readonly SizeSource[], slope: number, ceiling: number) {
     this.#ceiling = ceiling;
     this.#slope = slope;
-    const kept = dropMet(sources, slope, ceiling);
+    const kept = sources.filter(({ size }) => size < ceiling);
     this.#x = Float64Array.from(kept, ({ x }) => x);
     this.#y = Float64Array.from(kept, ({ y }) => y);
     this.#size = Float64Array.from(kept, ({ size }) => size);
@@ -99,19 +99,4 @@ export class SizeField {
     }
     return best;
   }
-}
-
-// Keeps sources that lower the field of the finer ones; finest first, ties in input order.
-function dropMet(sources: readonly SizeSource[], slope: number, ceiling: number): SizeSource[] {
-  const order = sources.map((_, i) => i).sort((a, b) => sources[a].size - sources[b].size || a - b);
-  const kept: SizeSource[] = [];
-  for (const i of order) {
-    const source = sources[i];
-    if (!(source.size < ceiling)) break;
-    const met = kept.some(
-      (k) => k.size + slope * Math.hypot(k.x - source.x, k.y - source.y) <= source.size * 1.05,
-    );
-    if (!met) kept.push(source);
-  }
-  return kept;
 }

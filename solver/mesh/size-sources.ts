@@ -3,6 +3,7 @@ import { distanceToSegment } from '../geometry/segments';
 import { AcrossFinder } from './across-finder';
 import type { Ground } from './ground';
 import type { SizeSource } from './size-field';
+import { SizeField } from './size-field';
 
 /** Size at a square-root singularity relative to the distance to the next feature. */
 const tipRatio = 1 / 1000;
@@ -21,7 +22,10 @@ const acrossCount = 1.25;
  * @returns Sources; sizes in metres.
  */
 export function listSizeSources(ground: Ground, ceiling: number): SizeSource[] {
-  return [...listCornerSources(ground, ceiling), ...listThinSources(ground, ceiling)];
+  const corners = listCornerSources(ground, ceiling);
+  const field = new SizeField(corners, 0.4, ceiling);
+  const thin = listThinSources(ground, ceiling).filter(({ x, y, size }) => size < field.sizeAt(x, y));
+  return [...corners, ...thin];
 }
 
 /** One way out of a vertex along a segment. */
