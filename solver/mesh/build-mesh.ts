@@ -6,9 +6,11 @@ import { collectLines } from './lines';
 import type { Mesh } from './mesh';
 import type { MeshOptions, MeshOutcome } from './outcome';
 import { findMinAngle } from './quality';
+import { remarkOnGround, remarkOnPieces } from './remarks';
 import { refineGround } from './refine';
 import type { SizeSource } from './size-field';
-import { SizeField } from './size-field';
+import { FarField } from './far-field';
+import type { SizeSources } from './size-sources';
 import { listSizeSources } from './size-sources';
 import { buildTopology } from './topology';
 
@@ -16,9 +18,12 @@ export type { GeometryFinding, GeometryFindingCode, LineKind, MeshOptions, MeshO
 
 /** Growth of the element size per metre of distance at size factor 1; it shrinks with the sizes, so that halving quarters. */
 const slope = 0.4;
-/** Largest element relative to the ground's mean thickness. */
-const ceilingRatio = 1 / 3;
+/** Largest elements near disturbances and far from them, relative to the ground's mean thickness. */
+const nearRatio = 1 / 3;
+const farRatio = 0.8;
 const maxAttempts = 10;
+/** Beyond this, indices into the arrays would outgrow their type. */
+const hardLimit = 50_000_000;
 
 /**
  * Meshes a section: arranges its lines, triangulates, refines towards singular points, splits nodes along barriers.
@@ -31,24 +36,24 @@ export function buildMesh(geometry: SectionGeometry, options: MeshOptions): Mesh
   const first = prepareGround(geometry);
   if (!first.ground) return { status: 'refused', findings: first.findings };
   const extent = measureGround(first.ground);
-  const sources = listSizeSources(first.ground, ceilingRatio * extent.thickness);
+  const sources = listSizeSources(first.ground, farRatio * extent.thickness);
+  const remarks = remarkOnGround(first.ground);
   let ground: Ground | null = first.ground;
-  let factor = options.sizeFactor;
+  let factor = options.sizeFactor > 0 ? Math.min(options.sizeFactor, 1e3) : 1;
+  const maxTriangles = options.maxElements >= 1 ? Math.min(options.maxElements, hardLimit) : 1;
   for (let attempt = 0; attempt < maxAttempts && ground; attempt++) {
     // Last, thin places keep their narrow triangles: better a poor mesh with a remark than none.
-    const floor =
-      attempt < 3
-        ? ground.snap
-        : 2 ** (attempt - 4) * Math.sqrt(extent.area / Math.max(options.maxElements, 1));
+    const floor = attempt < 3 ? ground.snap : 2 ** (attempt - 4) * Math.sqrt(extent.area / maxTriangles);
     const field = buildField(sources, extent.thickness, { options, factor, floor });
-    const refined = refineGround(ground, field, { maxTriangles: options.maxElements, floor });
+    const refined = refineGround(ground, field, { maxTriangles, floor });
     if (refined.status === 'refined') {
-      const findings = [...first.findings];
+      const mesh = assembleMesh(ground, options.order);
+      const findings = [...remarks, ...remarkOnPieces(mesh, geometry)];
       if (attempt > 0)
         findings.push({ code: 'element-limit', at: [ground.x[0], ground.y[0]], value: factor });
-      return { status: 'meshed', mesh: assembleMesh(ground, options.order), findings };
+      return { status: 'meshed', mesh, findings };
     }
-    const excess = Math.sqrt(refined.estimate / Math.max(options.maxElements, 1));
+    const excess = Math.sqrt(refined.estimate / maxTriangles);
     factor *= Math.min(Math.max(1.1 * excess, 1.2), 6);
     ground = prepareGround(geometry).ground; // the refinement has used up the first
   }
@@ -62,17 +67,18 @@ interface Density {
 }
 
 function buildField(
-  sources: readonly SizeSource[],
+  { corners, thin }: SizeSources,
   thickness: number,
   { options, factor, floor }: Density,
-): SizeField {
-  const scaled = sources.map(({ x, y, size }) => ({ x, y, size: Math.max(size * factor, floor) }));
-  const asked = (options.refineAt ?? []).map(({ x, y, size }) => ({ x, y, size: Math.max(size, floor) }));
-  return new SizeField(
-    [...scaled, ...asked],
-    slope * Math.min(factor, 1.5),
-    ceilingRatio * thickness * factor,
-  );
+): FarField {
+  const clip = ({ x, y, size }: SizeSource): SizeSource => ({ x, y, size: Math.max(size, floor) });
+  const scaled = [...corners, ...thin].map(({ x, y, size }) => clip({ x, y, size: size * factor }));
+  const asked = (options.refineAt ?? []).map(clip);
+  return new FarField([...scaled, ...asked], corners, slope * Math.min(factor, 1.5), {
+    near: nearRatio * thickness * factor,
+    far: farRatio * thickness * factor,
+    reach: thickness,
+  });
 }
 
 // Area, metres squared, and mean thickness across the longer extent, metres.

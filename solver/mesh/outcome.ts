@@ -26,7 +26,7 @@ export type GeometryFindingCode =
   | 'element-limit'
   /** The input itself has an angle below 25 degrees; `value` is that angle, degrees. */
   | 'small-angle'
-  /** The ground is in several unconnected pieces (barriers of zero width count as cuts); `value` is their number. */
+  /** The ground is in several pieces between which no water can pass; `value` is their number. */
   | 'ground-in-pieces';
 
 /** One remark or refusal, with the place it speaks of. */

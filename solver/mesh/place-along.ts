@@ -1,5 +1,5 @@
 // Where a segment is split so that its pieces have the wanted sizes.
-import type { SizeField } from './size-field';
+import type { Sizing } from './far-field';
 
 /** What is special about the ends of a segment. */
 export interface SegmentEnds {
@@ -8,6 +8,8 @@ export interface SegmentEnds {
   /** Distance of the first split from a sharp end, metres. */
   readonly shellStart: number;
   readonly shellEnd: number;
+  /** Splits beyond which the caller gives up; the list may then end early. */
+  readonly most: number;
 }
 
 /**
@@ -19,23 +21,23 @@ export interface SegmentEnds {
  * @returns Places between 0 and 1, ascending.
  */
 export function placeAlong(
-  field: SizeField,
+  field: Sizing,
   line: readonly [number, number, number, number],
   ends: SegmentEnds,
 ): number[] {
   const length = Math.hypot(line[2] - line[0], line[3] - line[1]);
   const from = ends.sharpStart && ends.shellStart < 0.45 * length ? ends.shellStart / length : 0;
   const to = ends.sharpEnd && ends.shellEnd < 0.45 * length ? 1 - ends.shellEnd / length : 1;
-  const inner = spread(field, line, from, to);
+  const inner = spread(field, line, [from, to], ends.most);
   return [...(from > 0 ? [from] : []), ...inner, ...(to < 1 ? [to] : [])];
 }
 
 // Splits [from, to] into pieces that each hold the same integral of 1/size.
 function spread(
-  field: SizeField,
+  field: Sizing,
   [ax, ay, bx, by]: readonly [number, number, number, number],
-  from: number,
-  to: number,
+  [from, to]: readonly [number, number],
+  most: number,
 ): number[] {
   const length = Math.hypot(bx - ax, by - ay);
   const sizeAt = (t: number): number => field.sizeAt(ax + t * (bx - ax), ay + t * (by - ay)) / length;

@@ -1,7 +1,7 @@
 // Delaunay refinement to a size field and a least angle.
 import { findSide } from './delaunay';
 import type { Ground } from './ground';
-import type { SizeField } from './size-field';
+import type { Sizing } from './far-field';
 import { placeAlong } from './place-along';
 import { TriangleQueue } from './triangle-queue';
 import type { Triangulation } from './triangulation';
@@ -37,7 +37,7 @@ export type RefineOutcome =
  *   A. Üngör (2004), Off-centers; S. Rebay (1993), Efficient unstructured mesh generation (size of the new triangle);
  *   G. L. Miller, S. E. Pav, N. J. Walkington (2003), When and why Delaunay refinement algorithms work (small angles).
  */
-export function refineGround(ground: Ground, field: SizeField, limits: RefineLimits): RefineOutcome {
+export function refineGround(ground: Ground, field: Sizing, limits: RefineLimits): RefineOutcome {
   const refiner = new Refiner(ground, field, limits);
   const pieces = refiner.splitSegments();
   if (pieces > limits.maxTriangles) return { status: 'limit', estimate: 2 * pieces };
@@ -51,7 +51,7 @@ class Refiner {
   readonly segmentOf: number[];
   readonly #mesh: Triangulation;
   readonly #ground: Ground;
-  readonly #field: SizeField;
+  readonly #field: Sizing;
   readonly #limits: RefineLimits;
   readonly #queue = new TriangleQueue();
   readonly #sharp: Uint8Array;
@@ -60,7 +60,7 @@ class Refiner {
   #px = 0;
   #py = 0;
 
-  constructor(ground: Ground, field: SizeField, limits: RefineLimits) {
+  constructor(ground: Ground, field: Sizing, limits: RefineLimits) {
     this.#mesh = ground.mesh;
     this.#ground = ground;
     this.#field = field;
@@ -81,6 +81,7 @@ class Refiner {
         sharpEnd: this.#sharp[b] === 1,
         shellStart: this.#shellOf(a),
         shellEnd: this.#shellOf(b),
+        most: this.#limits.maxTriangles,
       });
       pieces += list.length + 1;
       return list;

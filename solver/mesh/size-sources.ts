@@ -4,6 +4,8 @@ import { AcrossFinder } from './across-finder';
 import type { Ground } from './ground';
 import type { SizeSource } from './size-field';
 import { SizeField } from './size-field';
+import type { Spoke } from './spokes';
+import { listSpokes, turnFrom } from './spokes';
 
 /** Size at a square-root singularity relative to the distance to the next feature. */
 const tipRatio = 1 / 1000;
@@ -14,48 +16,26 @@ const footExponent = 0.95;
 /** Elements across a thin layer. */
 const acrossCount = 1.25;
 
+/** Where small elements are wanted, sizes in metres. */
+export interface SizeSources {
+  /** Points that disturb the flow. */
+  readonly corners: SizeSource[];
+  /** Points along thin places. */
+  readonly thin: SizeSource[];
+}
+
 /**
  * Lists the places that want small elements at size factor 1.
  *
  * @param ground - The ground.
  * @param ceiling - Largest size anywhere, metres.
- * @returns Sources; sizes in metres.
+ * @returns Sources by reason.
  */
-export function listSizeSources(ground: Ground, ceiling: number): SizeSource[] {
+export function listSizeSources(ground: Ground, ceiling: number): SizeSources {
   const corners = listCornerSources(ground, ceiling);
   const field = new SizeField(corners, 0.4, ceiling);
   const thin = listThinSources(ground, ceiling).filter(({ x, y, size }) => size < field.sizeAt(x, y));
-  return [...corners, ...thin];
-}
-
-/** One way out of a vertex along a segment. */
-interface Spoke {
-  readonly segment: number;
-  readonly to: number;
-  readonly angle: number;
-  /** Materials anticlockwise after the spoke and before it. */
-  readonly after: number;
-  readonly before: number;
-  /** What holds along it: an edge's index, 1e6 + a drain's, −1 on a closed side, −2 on a mere change of material. */
-  readonly condition: number;
-}
-
-function listSpokes(ground: Ground): Spoke[][] {
-  const spokes: Spoke[][] = ground.x.map(() => []);
-  ground.starts.forEach((a, segment) => {
-    const b = ground.ends[segment];
-    const inner = ground.left[segment] >= 0 && ground.right[segment] >= 0;
-    const drain = ground.drainOn[segment];
-    let condition = inner && ground.barrierOn[segment] < 0 ? -2 : ground.edgeOn[segment];
-    if (drain >= 0) condition = 1e6 + drain;
-    const [left, right] = [ground.left[segment], ground.right[segment]];
-    const angle = Math.atan2(ground.y[b] - ground.y[a], ground.x[b] - ground.x[a]);
-    const back = Math.atan2(ground.y[a] - ground.y[b], ground.x[a] - ground.x[b]);
-    spokes[a].push({ segment, to: b, angle, after: left, before: right, condition });
-    spokes[b].push({ segment, to: a, angle: back, after: right, before: left, condition });
-  });
-  for (const list of spokes) list.sort((p, q) => p.angle - q.angle || p.to - q.to);
-  return spokes;
+  return { corners, thin };
 }
 
 function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
@@ -85,8 +65,7 @@ function findExponent(spokes: readonly Spoke[]): number | null {
     if (from.after < 0) return;
     const j = bounds[(k + 1) % bounds.length];
     const to = spokes[j];
-    let angle = to.angle - from.angle;
-    if (angle <= 0) angle += 2 * Math.PI;
+    const angle = turnFrom(from, to);
     const inner = (j - i - 1 + spokes.length) % spokes.length;
     const alike = from.condition === to.condition;
     let exponent = (alike ? 1 : 0.5) * (Math.PI / angle);
@@ -102,9 +81,7 @@ function findExponent(spokes: readonly Spoke[]): number | null {
 function interfaceExponent(spokes: readonly Spoke[]): number | null {
   let widest = 0;
   for (let i = 0; i < spokes.length; i++) {
-    let angle = spokes[(i + 1) % spokes.length].angle - spokes[i].angle;
-    if (angle <= 0) angle += 2 * Math.PI;
-    widest = Math.max(widest, angle);
+    widest = Math.max(widest, turnFrom(spokes[i], spokes[(i + 1) % spokes.length]));
   }
   const exponent = Math.max(Math.PI / widest, spokes.length > 2 ? 0.6 : 0);
   return exponent < 0.9 ? exponent : null;
