@@ -6,7 +6,7 @@ import { paths } from '@/lib/paths';
 export default function NotFound() {
   return (
     <>
-      <header className="max-w-page mx-auto px-4 pt-4 sm:px-8">
+      <header className="mx-auto max-w-page px-4 pt-4 sm:px-8">
         <Link href={paths.home()} className="inline-block">
           <Wordmark />
         </Link>

@@ -14,8 +14,9 @@ const unreachable = {
 
 interface ActionFormOptions<Input extends FieldValues, Output, Value> {
   schema: z.ZodType<Output, Input>;
-  defaultValues: DefaultValues<Input>;
-  action: (input: Output) => Promise<ActionResult<Value>>;
+  defaultValues: NoInfer<DefaultValues<Input>>;
+  /** Takes what was typed, not what the schema made of it: the server reads the same words with the same schema. */
+  action: (input: NoInfer<Input>) => Promise<ActionResult<Value>>;
   /** Called once the server said yes. */
   onDone: (value: Value, input: Output) => void;
 }
@@ -40,7 +41,7 @@ export function useActionForm<Input extends FieldValues, Output, Value>(
     setFailure(null);
     let result: ActionResult<Value>;
     try {
-      result = await action(values);
+      result = await action(form.getValues());
     } catch {
       setFailure(unreachable);
       return;

@@ -1,0 +1,12 @@
+import { Skeleton } from '@/components/ui/skeleton';
+
+export default function AuthLoading() {
+  return (
+    <>
+      <p role="status" className="sr-only">
+        Loading
+      </p>
+      <Skeleton lines={6} />
+    </>
+  );
+}

@@ -1,0 +1,5 @@
+import { PageSkeleton } from '@/components/layout/page-frame';
+
+export default function Loading() {
+  return <PageSkeleton />;
+}
