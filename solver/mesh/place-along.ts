@@ -43,7 +43,7 @@ function spread(
   const sizeAt = (t: number): number => field.sizeAt(ax + t * (bx - ax), ay + t * (by - ay)) / length;
   const places = [from];
   const sums = [0];
-  for (let t = from, size = sizeAt(from); t < to;) {
+  for (let t = from, size = sizeAt(from); t < to && places.length <= 3 * most;) {
     const step = Math.min(size / 2, to - t);
     const next = t + step >= to ? to : t + step;
     const nextSize = sizeAt(next);

@@ -51,7 +51,8 @@ function findNearGaps(ground: Ground, all: readonly Spoke[][]): GeometryFinding[
     if (kind !== 'barrier' && kind !== 'drain') continue;
     for (const v of [vertices[0], vertices[vertices.length - 1]]) {
       if (v === undefined || v < 0 || all[v].length !== 1) continue; // an end that meets something is joined
-      const near = findNearest(ground, v, new Set(segments));
+      const own = new Set([...segments, ...vertices.flatMap((w) => all[w].map(({ segment }) => segment))]);
+      const near = findNearest(ground, v, own);
       const at = [x[v], y[v]] as const;
       if (near) findings.push({ code: 'near-gap', at, line: { kind, index }, value: near.distance });
     }
@@ -89,10 +90,13 @@ function findNearest(
   return best;
 }
 
-// Whether a direction from a vertex points out of the ground.
+// Whether a direction from a vertex points out of the ground, clear of the outline itself.
 function leavesGround(spokes: readonly Spoke[], direction: number): boolean {
-  const before = spokes.filter(({ angle }) => angle <= direction).at(-1) ?? spokes[spokes.length - 1];
-  return before.after < 0;
+  const clear = 0.05;
+  return spokes.some((spoke, i) => {
+    const turn = turnFrom(spoke, { ...spoke, angle: direction });
+    return spoke.after < 0 && turn > clear && turn < turnFrom(spoke, spokes[(i + 1) % spokes.length]) - clear;
+  });
 }
 
 function entersFromOutside({ x, y, starts, ends, left, right }: Ground, v: number, s: number): boolean {
