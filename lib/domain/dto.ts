@@ -67,8 +67,7 @@ export interface SectionDetail extends SectionSummary {
 }
 
 export type SaveOutcome =
-  | { status: 'saved'; version: number; savedAt: string }
-  | { status: 'conflict'; current: SectionDetail };
+  { status: 'saved'; version: number; savedAt: string } | { status: 'conflict'; current: SectionDetail };
 
 export interface Member {
   userId: string;
@@ -137,5 +136,4 @@ export interface Desk {
 
 /** What an action answers: done, or what to mend, field by field. Nothing typed is lost. */
 export type ActionResult<T = undefined> =
-  | { ok: true; value: T }
-  | { ok: false; code: string; message: string; fields?: Record<string, string> };
+  { ok: true; value: T } | { ok: false; code: string; message: string; fields?: Record<string, string> };

@@ -4,12 +4,17 @@ import { z } from 'zod';
 import { sectionLimits as limits } from './limits';
 
 const finite = z.number('must be a number');
-const coordinate = finite.min(-1e6, 'must lie within ±1 000 km of the datum').max(1e6, 'must lie within ±1 000 km of the datum');
+const coordinate = finite
+  .min(-1e6, 'must lie within ±1 000 km of the datum')
+  .max(1e6, 'must lie within ±1 000 km of the datum');
 const id = z
   .string('must be text')
   .min(1, 'must not be empty')
   .max(64, 'must be at most 64 characters')
-  .regex(/^[A-Za-z0-9][A-Za-z0-9_.:-]*$/, 'must be letters, digits and - _ . : only, and begin with a letter or digit');
+  .regex(
+    /^[A-Za-z0-9][A-Za-z0-9_.:-]*$/,
+    'must be letters, digits and - _ . : only, and begin with a letter or digit',
+  );
 const name = z.string('must be text').max(limits.name, `must be at most ${limits.name} characters`);
 const text = z.string('must be text').max(limits.text, `must be at most ${limits.text} characters`);
 
@@ -25,11 +30,12 @@ const ring = z
   .min(3, 'needs at least three points')
   .max(limits.pathPoints, `may have at most ${limits.pathPoints} points`);
 
-const permeability = finite
-  .positive('must be greater than 0 m/s')
-  .max(1e3, 'must be at most 1000 m/s');
+const permeability = finite.positive('must be greater than 0 m/s').max(1e3, 'must be at most 1000 m/s');
 
-const level = z.union([z.string().min(1).max(64), finite], 'must be the name of a level or a number in metres');
+const level = z.union(
+  [z.string().min(1).max(64), finite],
+  'must be the name of a level or a number in metres',
+);
 
 export const conditionSchema = z
   .discriminatedUnion(
@@ -60,14 +66,32 @@ export const materialSchema = z
     name,
     kMajor: permeability.meta({ description: 'Permeability along the major axis, m/s.' }),
     kMinor: permeability.meta({ description: 'Permeability across the major axis, m/s.' }),
-    angle: finite.min(-360).max(360).default(0).meta({ description: 'Degrees from +x to the major axis, anticlockwise.' }),
+    angle: finite
+      .min(-360)
+      .max(360)
+      .default(0)
+      .meta({ description: 'Degrees from +x to the major axis, anticlockwise.' }),
     kRange: z
-      .object({ low: finite.positive('must be greater than 0'), high: finite.positive('must be greater than 0') })
+      .object({
+        low: finite.positive('must be greater than 0'),
+        high: finite.positive('must be greater than 0'),
+      })
       .optional(),
     kSource: z
-      .enum(['pumping-test', 'borehole-test', 'laboratory', 'grading', 'published-range', 'judgement', 'borrowed'])
+      .enum([
+        'pumping-test',
+        'borehole-test',
+        'laboratory',
+        'grading',
+        'published-range',
+        'judgement',
+        'borrowed',
+      ])
       .optional(),
-    saturatedUnitWeight: finite.positive('must be greater than 0 kN/m³').max(60, 'must be at most 60 kN/m³').optional(),
+    saturatedUnitWeight: finite
+      .positive('must be greater than 0 kN/m³')
+      .max(60, 'must be at most 60 kN/m³')
+      .optional(),
     porosity: finite.gt(0, 'must lie between 0 and 1').lt(1, 'must lie between 0 and 1').optional(),
     grading: gradingSchema.optional(),
     retention: z
@@ -97,8 +121,12 @@ export const barrierSchema = z
   })
   .meta({ id: 'Barrier' });
 
-export const drainSchema = z.object({ id, name: name.optional(), path, condition: conditionSchema }).meta({ id: 'Drain' });
-export const edgeSchema = z.object({ id, name: name.optional(), path, condition: conditionSchema }).meta({ id: 'Edge' });
+export const drainSchema = z
+  .object({ id, name: name.optional(), path, condition: conditionSchema })
+  .meta({ id: 'Drain' });
+export const edgeSchema = z
+  .object({ id, name: name.optional(), path, condition: conditionSchema })
+  .meta({ id: 'Edge' });
 
 export const structureSchema = z
   .object({
@@ -131,7 +159,10 @@ export const sectionSchema = z
     question: text.optional(),
     geometry: z.enum(['plane', 'axisymmetric'], 'must be "plane" or "axisymmetric"'),
     datum: name.optional(),
-    materials: z.array(materialSchema, 'must be a list of materials').min(1, 'needs at least one material').max(limits.materials),
+    materials: z
+      .array(materialSchema, 'must be a list of materials')
+      .min(1, 'needs at least one material')
+      .max(limits.materials),
     zones: z.array(zoneSchema, 'must be a list of zones').min(1, 'needs at least one zone').max(limits.zones),
     barriers: z.array(barrierSchema, 'must be a list of barriers').max(limits.barriers).default([]),
     drains: z.array(drainSchema, 'must be a list of drains').max(limits.drains).default([]),
@@ -141,7 +172,10 @@ export const sectionSchema = z
       .array(situationSchema, 'must be a list of situations')
       .min(1, 'needs at least one situation')
       .max(limits.situations),
-    piezometers: z.array(piezometerSchema, 'must be a list of piezometers').max(limits.piezometers).default([]),
+    piezometers: z
+      .array(piezometerSchema, 'must be a list of piezometers')
+      .max(limits.piezometers)
+      .default([]),
     assessment: z
       .object({
         averagingLength: finite.positive('must be greater than 0 m').optional(),
@@ -149,7 +183,11 @@ export const sectionSchema = z
       })
       .optional(),
   })
-  .meta({ id: 'Section', title: 'Underfall section document', description: 'One cross-section; SI units throughout.' });
+  .meta({
+    id: 'Section',
+    title: 'Underfall section document',
+    description: 'One cross-section; SI units throughout.',
+  });
 
 /** A section document as read, with its defaults filled in. */
 export type SectionDocument = z.output<typeof sectionSchema>;
