@@ -17,36 +17,60 @@ export interface WedgeSector {
 export type WedgeSides = readonly [first: 'head' | 'impervious', last: 'head' | 'impervious'];
 
 /**
- * Rays closer to a right or straight angle than this are taken as such: coordinates typed to the millimetre over tens of metres
- * leave angles uncertain by about 1e-5, and λ moves by as little.
+ * Exponents closer to 1 than this are taken as 1. Coordinates typed to the millimetre over tens of metres leave angles uncertain by
+ * about 1e-5, and λ moves by as little: a right or straight angle as drawn must not read as a singular one. r^(−2e-5) is 1.0005 at
+ * a ten-thousandth of a metre: nothing that is infinite in practice is lost.
  */
 const exponentSlack = 2e-5;
 
 /**
- * Finds whether the gradient at the point of a wedge is infinite.
- *
- * In each sector h and ψ/k are Re and Im of c ζ^λ in the section that makes its material isotropic; across rays h and ψ are continuous.
- * The smallest λ in (0, 1) at which both sides' conditions can hold is sought by scan and bisection.
+ * Finds whether the gradient at the point of a wedge is infinite, and how fast it grows.
  *
  * @param sectors - From the first side to the last, counter-clockwise, each under 180°.
  * @param sides - Conditions on the first and last side.
- * @returns The exponent, or 1 where there is none below 1: the gradient is bounded.
- * @source Strang & Fix (1973), ch. 8; methods of transfer matrices for composite wedges (from memory).
+ * @returns The least exponent λ of h ~ r^λ, or 1 where there is none below 1: the gradient, r^(λ−1), is bounded.
+ * @source Strang & Fix (1973), ch. 8 (from memory); see {@link listExponents}.
  */
 export function cornerExponent(sectors: readonly WedgeSector[], sides: WedgeSides): number {
+  const [least] = listExponents(sectors, sides, 1);
+  return least < 1 - exponentSlack ? least : 1;
+}
+
+/**
+ * Lists the exponents λ of the terms r^λ f(θ) that the head may have at the point of a wedge, the constant term left out.
+ *
+ * In each sector h and ψ are Re and Im of c ζ^λ in the section that makes its material isotropic; across rays h and ψ are continuous.
+ * So the vector (k h, ψ) turns by λ times the sector's transformed angle, and k changes at a ray without moving the vector out of its
+ * quadrant. The phase at the last side grows steadily with λ from any conditions on the first (Sturm's theorem), each exponent is
+ * where it passes the next right value, and bisection finds every one of them.
+ *
+ * @param sectors - From the first side to the last, counter-clockwise, each under 180°.
+ * @param sides - Conditions on the first and last side.
+ * @param count - How many.
+ * @returns Positive exponents, ascending.
+ * @source Strang & Fix (1973), An Analysis of the Finite Element Method, ch. 8, for one material; D. Leguillon, E. Sanchez-Palencia
+ *   (1987), Computation of Singular Solutions in Elliptic Problems and Elasticity, for several (both from memory).
+ */
+export function listExponents(sectors: readonly WedgeSector[], sides: WedgeSides, count: number): number[] {
   const parts = sectors.map(transformSector);
-  const mismatch = (lambda: number): number => endValue(parts, sides, lambda);
-  const steps = 400;
-  let low = 0.01;
-  let before = mismatch(low);
-  for (let i = 1; i <= steps; i++) {
-    const high = 0.01 + ((1 - exponentSlack - 0.01) * i) / steps;
-    const now = mismatch(high);
-    if (before * now <= 0) return bisect(mismatch, low, high, before);
-    low = high;
-    before = now;
-  }
-  return 1;
+  const start = sides[0] === 'head' ? Math.PI / 2 : 0;
+  const end = sides[1] === 'head' ? Math.PI / 2 : 0;
+  // At λ = 0 the phase is the start's; the first target lies above it, for the constant term is no exponent.
+  const first = end > start ? end : end + Math.PI;
+  const total = parts.reduce((sum, { angle }) => sum + angle, 0);
+  return Array.from({ length: count }, (_, i) => {
+    const target = first + i * Math.PI;
+    let low = 0;
+    // Each quadrant the vector crosses takes at most a right angle of λ times an angle in the sector it is in.
+    let high = (target - start) / total;
+    while (phaseAt(parts, start, high) < target) high *= 2;
+    for (let step = 0; step < 60; step++) {
+      const middle = (low + high) / 2;
+      if (phaseAt(parts, start, middle) < target) low = middle;
+      else high = middle;
+    }
+    return (low + high) / 2;
+  });
 }
 
 interface TransformedSector {
@@ -54,9 +78,6 @@ interface TransformedSector {
   readonly k: number;
   /** Angle in the transformed section, radians. */
   readonly angle: number;
-  /** Stretch of unit length along the first and last ray. */
-  readonly stretchFrom: number;
-  readonly stretchTo: number;
 }
 
 function transformSector({ conductivity, from, to }: WedgeSector): TransformedSector {
@@ -67,39 +88,25 @@ function transformSector({ conductivity, from, to }: WedgeSector): TransformedSe
   const v1 = map.a21 * to[0] + map.a22 * to[1];
   return {
     k: Math.sqrt(conductivity.kMajor * conductivity.kMinor),
-    angle: Math.abs(Math.atan2(u0 * v1 - v0 * u1, u0 * u1 + v0 * v1)),
-    stretchFrom: Math.hypot(u0, v0) / Math.hypot(from[0], from[1]),
-    stretchTo: Math.hypot(u1, v1) / Math.hypot(to[0], to[1]),
+    angle: Math.atan2(u0 * v1 - v0 * u1, u0 * u1 + v0 * v1),
   };
 }
 
-function endValue(parts: readonly TransformedSector[], sides: WedgeSides, lambda: number): number {
-  let h = sides[0] === 'head' ? 0 : 1;
-  let psi = sides[0] === 'head' ? parts[0].k : 0;
-  for (const { k, angle, stretchFrom, stretchTo } of parts) {
-    const c = Math.cos(lambda * angle);
-    const s = Math.sin(lambda * angle);
-    const grow = (stretchTo / stretchFrom) ** lambda;
-    const p = psi / k;
-    const next = grow * (h * c - p * s);
-    psi = k * grow * (p * c + h * s);
-    h = next;
-  }
-  return sides[1] === 'head' ? h : psi;
+// Phase of (k h, ψ) at the last side, with the k of the last sector.
+function phaseAt(parts: readonly TransformedSector[], start: number, lambda: number): number {
+  let phase = start;
+  parts.forEach(({ k, angle }, i) => {
+    if (i > 0 && k !== parts[i - 1].k) {
+      const turns = Math.round(phase / Math.PI);
+      const rest = phase - turns * Math.PI;
+      phase = turns * Math.PI + Math.atan((Math.tan(rest) * parts[i - 1].k) / k);
+    }
+    phase += lambda * angle;
+  });
+  return phase;
 }
 
-function bisect(f: (x: number) => number, low: number, high: number, atLow: number): number {
-  let a = low;
-  let b = high;
-  for (let i = 0; i < 60; i++) {
-    const middle = (a + b) / 2;
-    if (f(middle) * atLow > 0) a = middle;
-    else b = middle;
-  }
-  return (a + b) / 2;
-}
-
-/** The ground around a boundary node, from one boundary side to the other. */
+/** The ground around a boundary node, from one boundary side (or drain) to the other. */
 export interface NodeWedge {
   readonly sectors: readonly WedgeSector[];
   /** Boundary sides, 3 · element + side, at the clockwise and the counter-clockwise end. */
@@ -114,6 +121,7 @@ export interface NodeWedge {
  * @param conductivities - One per material.
  * @param element - An element at the node.
  * @param corner - The node's corner in it.
+ * @param isWall - Says of a side, 3 · element + side, whether the wedge ends there though ground lies across: a drain with a head.
  * @returns The wedge; null for a node inside the ground.
  */
 export function wedgeAt(
@@ -121,6 +129,7 @@ export function wedgeAt(
   conductivities: readonly Conductivity[],
   element: number,
   corner: number,
+  isWall: (side: number) => boolean = () => false,
 ): NodeWedge | null {
   const stride = mesh.order === 1 ? 3 : 6;
   const node = mesh.elements[stride * element + corner];
@@ -131,8 +140,9 @@ export function wedgeAt(
   // side k joins corner k to k + 1: turning clockwise round the node crosses the side that leaves it
   let at = element;
   for (let turns = 0; ; turns++) {
-    const next = mesh.neighbours[3 * at + cornerIn(at)];
-    if (next < 0) break;
+    const side = 3 * at + cornerIn(at);
+    const next = mesh.neighbours[side];
+    if (next < 0 || isWall(side)) break;
     if (next === element || turns > mesh.elementCount) return null;
     at = next;
   }
@@ -146,7 +156,7 @@ export function wedgeAt(
       to: rayTo(mesh, node, mesh.elements[stride * at + ((k + 2) % 3)]),
     });
     const side = 3 * at + ((k + 2) % 3);
-    if (mesh.neighbours[side] < 0) return { sectors, first, last: side };
+    if (mesh.neighbours[side] < 0 || isWall(side)) return { sectors, first, last: side };
     at = mesh.neighbours[side];
   }
 }

@@ -12,6 +12,13 @@ const linearSamples = [1 / 3, 1 / 3];
 /** A patch fills a re-entrant corner when its elements turn further than this round the node, radians. */
 const reentrantAngle = (200 / 180) * Math.PI;
 
+/** Fitted patches of one solved mesh. */
+export interface Recovery {
+  readonly patches: Patches;
+  /** {@link PatchFit.size} numbers a patch, for {@link PatchFit.evaluate}. */
+  readonly coefficients: Float64Array;
+}
+
 /** Recovered gradients at the nodes of each element: discontinuous where conductivity changes. */
 export interface RecoveredGradients {
   /** ∂h/∂x, ∂h/∂y at each element's corners, length `6 * elementCount`. */
@@ -57,12 +64,30 @@ export function recoverNodeGradients(
   conductivities: readonly Conductivity[],
   heads: Float64Array,
 ): RecoveredGradients {
+  const { patches, coefficients } = fitPatches(mesh, conductivities, heads);
+  return evaluatePatches(mesh, patches, coefficients);
+}
+
+/**
+ * Fits the gradients of every patch of a solved mesh.
+ *
+ * @param mesh - The mesh.
+ * @param conductivities - One a material.
+ * @param heads - One a node, metres.
+ * @returns The fits, to be evaluated anywhere in their patches.
+ * @source Zienkiewicz & Zhu (1992), as for {@link recoverGradients}.
+ */
+export function fitPatches(
+  mesh: Mesh,
+  conductivities: readonly Conductivity[],
+  heads: Float64Array,
+): Recovery {
   const patches = findPatches(mesh, conductivities);
   const samples = sampleGradients(mesh, heads);
   const fit = new PatchFit(mesh, samples.perElement, samples.points, samples.values);
   const coefficients = new Float64Array(PatchFit.size * patches.count);
   for (let p = 0; p < patches.count; p++) fit.fit(patches, p, coefficients);
-  return evaluatePatches(mesh, patches, coefficients);
+  return { patches, coefficients };
 }
 
 function sampleGradients(
