@@ -12,11 +12,11 @@ export interface Place {
 /** Point location by a grid of buckets. */
 export interface Locator {
   /**
-   * Finds the element at a point; on a line between elements the one with the lowest index.
+   * Finds the element at a point; on a line between elements, and so on a barrier, the one with the lowest index.
    *
    * @param x - Metres.
    * @param y - Metres.
-   * @returns The place, or null outside the ground. Points within 1e-9 of the section's size count as inside.
+   * @returns The place, or null outside the ground. Points within 1e-6 of the section's size, its snap distance, count as inside.
    */
   find(x: number, y: number): Place | null;
 }
@@ -40,7 +40,8 @@ export function createLocator(mesh: Mesh): Locator {
     yMax = Math.max(yMax, coordinates[k + 1]);
   }
   const size = Math.max(xMax - xMin, yMax - yMin);
-  const slack = 1e-9 * size;
+  // Rounding first: a point a hair beside a barrier must not be given to the other face while its own element is there.
+  const [rounding, slack] = [1e-11 * size, 1e-6 * size];
   const cell = Math.max(Math.sqrt(((xMax - xMin) * (yMax - yMin)) / elementCount), size / 2000);
   const columns = Math.max(1, Math.ceil((xMax - xMin) / cell));
   const rows = Math.max(1, Math.ceil((yMax - yMin) / cell));
@@ -61,9 +62,12 @@ export function createLocator(mesh: Mesh): Locator {
   }
   return {
     find(x, y) {
-      for (const element of buckets.get(rowOf(y) * columns + columnOf(x)) ?? []) {
-        const place = placeIn(mesh, element, x, y, slack);
-        if (place) return place;
+      const candidates = buckets.get(rowOf(y) * columns + columnOf(x)) ?? [];
+      for (const distance of [rounding, slack]) {
+        for (const element of candidates) {
+          const place = placeIn(mesh, element, x, y, distance);
+          if (place) return place;
+        }
       }
       return null;
     },
