@@ -1,0 +1,30 @@
+import { recoverGradients, type FlowNet, type LevelLines, traceLevels } from '@/solver';
+import type { Lines, SituationFields } from './fields';
+import { headRange, type SolvedSituation } from './read-results';
+
+/** Takes what the screen draws of one solved situation. */
+export function readFields(
+  { situation, section, solution, stream }: SolvedSituation,
+  net: FlowNet,
+): SituationFields {
+  const { mesh, conductivities, heads } = section;
+  return {
+    situation: situation.id,
+    order: mesh.order,
+    coordinates: mesh.coordinates,
+    elements: mesh.elements,
+    elementMaterials: mesh.elementMaterials,
+    heads,
+    cornerGradients: recoverGradients(mesh, conductivities, solution.heads),
+    streamFunction: stream.values,
+    equipotentials: toLines(traceLevels(mesh, heads, net.headLevels)),
+    seepagePaths: stream.values
+      ? toLines(traceLevels(mesh, stream.values, net.streamLevels))
+      : { points: new Float64Array(0), offsets: Int32Array.of(0), values: new Float64Array(0) },
+    headRange: headRange(section),
+  };
+}
+
+function toLines({ points, offsets, values }: LevelLines): Lines {
+  return { points, offsets, values };
+}
