@@ -36,8 +36,8 @@ const misfitLimit = 0.02;
  * coefficients come from the nearest elements where both hold.
  *
  * @param input - Exponents, nodes of the face, reach and gradient.
- * @returns The series; null where the field is smooth (an integer least exponent), where too few nodes lie within reach, or where
- *   series and patches disagree.
+ * @returns The series, its first term alone where too few nodes lie within reach or where series and patches disagree; null where the
+ *   field is smooth (an integer least exponent).
  * @source Strang & Fix (1973), An Analysis of the Finite Element Method, ch. 8 (singular functions; from memory).
  */
 export function fitCornerSeries({ exponents, places, reach, raw }: SeriesInput): CornerSeries | null {
@@ -45,11 +45,10 @@ export function fitCornerSeries({ exponents, places, reach, raw }: SeriesInput):
   const limit = reachShare * reach;
   const within = places.filter((r) => r <= limit).length;
   const skipped = Math.min(skippedSides, within - 3);
-  if (skipped < 1) return null;
+  if (skipped < 1) return matchFirstTerm(exponents[0], places, raw);
   const chosen = places.slice(skipped, Math.min(within, skipped + mostSides + 1));
   const samples = chosen.flatMap((r, i) => (i === 0 ? [r] : [(chosen[i - 1] + r) / 2, r]));
   const count = Math.min(exponents.length, samples.length - 2);
-  if (count < 1) return null;
   const scale = samples[samples.length - 1];
   const values = samples.map(raw);
   // Each sample counts relative to the leading term, so that near and far ones weigh alike.
@@ -63,10 +62,24 @@ export function fitCornerSeries({ exponents, places, reach, raw }: SeriesInput):
     misfit += (fitted - right[i][0]) ** 2;
     size += right[i][0] ** 2;
   });
-  if (!(misfit <= misfitLimit ** 2 * size)) return null;
+  if (!(misfit <= misfitLimit ** 2 * size)) return matchFirstTerm(exponents[0], places, raw);
   const [near, far] = [samples[0], samples[Math.min(samples.length - 1, 4)]];
   return {
     shareAt: (r) => (r <= near ? 1 : r >= far ? 0 : (far - r) / (far - near)),
     valueAt: (r) => coefficients.reduce((sum, c, k) => sum + c * (r / scale) ** (exponents[k] - 1), 0),
+  };
+}
+
+// Within the first side the leading term, matched to the patches at the side's far end.
+function matchFirstTerm(
+  exponent: number,
+  places: readonly number[],
+  raw: (r: number) => number,
+): CornerSeries {
+  const end = Math.min(places[1], places[places.length - 1] / 2);
+  const value = raw(end);
+  return {
+    shareAt: (r) => (r < end ? 1 : 0),
+    valueAt: (r) => value * (r / end) ** (exponent - 1),
   };
 }

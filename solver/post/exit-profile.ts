@@ -1,7 +1,7 @@
 // What comes out of the ground along an edge: outward gradient, flux, the average over a length, and the singular points.
 import type { LineSides, Mesh } from '../mesh/mesh';
 import { placeFacePoints } from './exit-places';
-import type { ExitContext, FaceRun } from './exit-face';
+import type { ExitContext, FaceRun, RunCorner } from './exit-face';
 import { listRuns } from './exit-face';
 import { fitPatches } from './recover';
 import { interpolate, parentCoordinates } from './locate';
@@ -217,11 +217,19 @@ function findMaximum(
     if ((point.gradient ?? -Infinity) > (steepest.gradient ?? -Infinity)) steepest = point;
     if (point.averaged > largest.averaged) largest = point;
   }
-  const corners = runs.flatMap(({ start, end }) => [start, end]).filter(({ unbounded }) => unbounded);
-  const strongest = corners.reduce<(typeof corners)[number] | null>(
-    (best, corner) => (best && best.exponent <= corner.exponent ? best : corner),
-    null,
-  );
+  // Of several singular points, the one where most is lost over the averaging length.
+  const averagedAt = ({ x, y }: RunCorner): number =>
+    Math.max(
+      ...profile.filter(({ at }) => at[0] === x && at[1] === y).map(({ averaged }) => averaged),
+      -Infinity,
+    );
+  const strongest = runs
+    .flatMap(({ start, end }) => [start, end])
+    .filter(({ unbounded }) => unbounded)
+    .reduce<RunCorner | null>(
+      (best, corner) => (best && averagedAt(best) >= averagedAt(corner) ? best : corner),
+      null,
+    );
   return {
     gradient: strongest ? null : steepest.gradient,
     averaged: largest.averaged,
