@@ -22,8 +22,8 @@ const slope = 0.4;
 const nearRatio = 1 / 3;
 const farRatio = 0.8;
 const maxAttempts = 10;
-/** Beyond this, indices into the arrays would outgrow their type. */
-const hardLimit = 50_000_000;
+/** The curve order holds no more. */
+const hardLimit = 8_000_000;
 
 /**
  * Meshes a section: arranges its lines, triangulates, refines towards singular points, splits nodes along barriers.
@@ -67,13 +67,13 @@ interface Density {
 }
 
 function buildField(
-  { corners, thin }: SizeSources,
+  { corners, thin, forced }: SizeSources,
   thickness: number,
   { options, factor, floor }: Density,
 ): FarField {
   const clip = ({ x, y, size }: SizeSource): SizeSource => ({ x, y, size: Math.max(size, floor) });
   const scaled = [...corners, ...thin].map(({ x, y, size }) => clip({ x, y, size: size * factor }));
-  const asked = (options.refineAt ?? []).map(clip);
+  const asked = [...forced, ...(options.refineAt ?? [])].map(clip);
   return new FarField([...scaled, ...asked], corners, slope * Math.min(factor, 1.5), {
     near: nearRatio * thickness * factor,
     far: farRatio * thickness * factor,

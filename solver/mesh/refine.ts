@@ -197,8 +197,7 @@ class Refiner {
     this.#propose(t);
     const place = mesh.walkTo(this.#px, this.#py, t);
     if (place < 0) {
-      this.#splitSide(-1 - place);
-      this.#requeue(t);
+      if (this.#splitSide(-1 - place)) this.#requeue(t);
       return;
     }
     const v = mesh.addVertex(this.#px, this.#py);

@@ -22,6 +22,8 @@ export interface SizeSources {
   readonly corners: SizeSource[];
   /** Points along thin places. */
   readonly thin: SizeSource[];
+  /** Short segments, whose length no density changes. */
+  readonly forced: SizeSource[];
 }
 
 /**
@@ -35,7 +37,7 @@ export function listSizeSources(ground: Ground, ceiling: number): SizeSources {
   const corners = listCornerSources(ground, ceiling);
   const field = new SizeField(corners, 0.4, ceiling);
   const thin = listThinSources(ground, ceiling).filter(({ x, y, size }) => size < field.sizeAt(x, y));
-  return { corners, thin };
+  return { corners, thin, forced: listShortSegments(ground, ceiling) };
 }
 
 function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
@@ -139,5 +141,18 @@ function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
       }
     }
   }
+  return sources;
+}
+
+// Short segments bring small elements with them; said beforehand, sizes grow from there in steps.
+function listShortSegments({ x, y, starts, ends }: Ground, ceiling: number): SizeSource[] {
+  const sources: SizeSource[] = [];
+  starts.forEach((a, s) => {
+    const b = ends[s];
+    const size = Math.hypot(x[b] - x[a], y[b] - y[a]);
+    if (size >= ceiling) return;
+    sources.push({ x: (x[a] + x[b]) / 2, y: (y[a] + y[b]) / 2, size });
+    for (const v of [a, b]) sources.push({ x: x[v], y: y[v], size });
+  });
   return sources;
 }

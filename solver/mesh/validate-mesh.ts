@@ -22,14 +22,28 @@ export function validateMesh(mesh: Mesh): MeshFault[] {
   const faults = new Set<MeshFault>();
   checkElements(mesh, faults);
   checkNeighbours(mesh, faults);
-  for (const line of [...mesh.edges, ...mesh.drains, ...mesh.bases]) checkLine(mesh, line, faults);
+  const slack = snapSlack * measureExtent(mesh);
+  for (const line of [...mesh.edges, ...mesh.drains, ...mesh.bases]) checkLine(mesh, line, slack, faults);
   for (const { left, right } of mesh.barriers) {
-    checkLine(mesh, left, faults);
-    checkLine(mesh, right, faults);
+    checkLine(mesh, left, slack, faults);
+    checkLine(mesh, right, slack, faults);
     checkFaces(mesh, left, right, faults);
   }
   checkOutline(mesh, faults);
   return [...faults];
+}
+
+/** Points move by up to the snap distance, 1e-6 of the section, each. */
+const snapSlack = 4e-6;
+
+function measureExtent({ coordinates }: Mesh): number {
+  const low = [Infinity, Infinity];
+  const high = [-Infinity, -Infinity];
+  coordinates.forEach((value, i) => {
+    low[i % 2] = Math.min(low[i % 2], value);
+    high[i % 2] = Math.max(high[i % 2], value);
+  });
+  return Math.max(high[0] - low[0], high[1] - low[1]);
 }
 
 function strideOf({ order }: Mesh): number {
@@ -93,12 +107,12 @@ function sidePlaces(mesh: Mesh, line: LineSides, i: number): [number, number, nu
 }
 
 // Sides in order: distances rise, and where one stops the next starts, in space as along the path.
-function checkLine(mesh: Mesh, line: LineSides, faults: Set<MeshFault>): void {
+function checkLine(mesh: Mesh, line: LineSides, slack: number, faults: Set<MeshFault>): void {
   for (let i = 0; i < line.elements.length; i++) {
     const [from, to] = [line.distances[2 * i], line.distances[2 * i + 1]];
     const [ax, ay, bx, by] = sidePlaces(mesh, line, i);
     const length = Math.hypot(bx - ax, by - ay);
-    if (!(to > from) || Math.abs(to - from - length) > 1e-3 * length + 1e-5 * to) faults.add('broken-line');
+    if (!(to > from) || Math.abs(to - from - length) > 1e-3 * length + slack) faults.add('broken-line');
     if (i === 0) continue;
     const [px, py, qx, qy] = sidePlaces(mesh, line, i - 1);
     const twin = line.distances[2 * i - 2] === from && px === ax && py === ay && qx === bx && qy === by;
