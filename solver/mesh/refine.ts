@@ -3,6 +3,7 @@ import { findSide } from './delaunay';
 import type { Ground } from './ground';
 import type { Sizing } from './far-field';
 import { placeAlong } from './place-along';
+import { findSharpCorners, measureShell } from './sharp-corners';
 import { TriangleQueue } from './triangle-queue';
 import type { Triangulation } from './triangulation';
 
@@ -17,8 +18,8 @@ const leastSine = Math.sin((25.5 * Math.PI) / 180);
 /** Off-centres make the new triangle's apex angle a little above the least angle. */
 const offCentreReach = 0.5 / Math.tan((29 * Math.PI) / 360);
 const sizeSlack = 1.25;
-/** Chord of 30 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
-const sharpChord = 2 * Math.sin(Math.PI / 12);
+/** Chord of 26 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
+const sharpChord = 2 * Math.sin((13 * Math.PI) / 180);
 
 /** The refined triangulation's vertices, or how many triangles it would have taken. */
 export type RefineOutcome =
@@ -120,14 +121,8 @@ class Refiner {
 
   // Radius of the first shell round a corner with a small angle.
   #shellOf(v: number): number {
-    const { x, y, starts, ends } = this.#ground;
-    if (!this.#sharp[v]) return 0;
-    let room = this.#field.sizeAt(x[v], y[v]);
-    for (let s = 0; s < starts.length; s++) {
-      if (starts[s] !== v && ends[s] !== v) continue;
-      room = Math.min(room, Math.hypot(x[starts[s]] - x[ends[s]], y[starts[s]] - y[ends[s]]) / 2.5);
-    }
-    return room;
+    const { x, y } = this.#ground;
+    return this.#sharp[v] ? Math.min(this.#field.sizeAt(x[v], y[v]), measureShell(this.#ground, v)) : 0;
   }
 
   // Refines until nothing is left to do; false where the limit was hit.
@@ -323,23 +318,4 @@ function commonEnd({ starts, ends }: Ground, p: number, q: number): number {
   if (starts[p] === starts[q] || starts[p] === ends[q]) return starts[p];
   if (ends[p] === starts[q] || ends[p] === ends[q]) return ends[p];
   return -1;
-}
-
-// Marks corners where two segments with ground between them meet at less than 60 degrees.
-function findSharpCorners({ x, y, starts, ends }: Ground): Uint8Array {
-  const sharp = new Uint8Array(x.length);
-  const angles: number[][] = x.map(() => []);
-  for (let s = 0; s < starts.length; s++) {
-    const [a, b] = [starts[s], ends[s]];
-    angles[a].push(Math.atan2(y[b] - y[a], x[b] - x[a]));
-    angles[b].push(Math.atan2(y[a] - y[b], x[a] - x[b]));
-  }
-  angles.forEach((list, v) => {
-    list.sort((p, q) => p - q);
-    for (let i = 0; i < list.length; i++) {
-      const turn = i + 1 < list.length ? list[i + 1] - list[i] : list[0] + 2 * Math.PI - list[i];
-      if (list.length > 1 && turn < (61 * Math.PI) / 180) sharp[v] = 1;
-    }
-  });
-  return sharp;
 }

@@ -3,6 +3,7 @@ import { distanceToSegment } from '../geometry/segments';
 import { AcrossFinder } from './across-finder';
 import type { Ground } from './ground';
 import type { SizeSource } from './size-field';
+import { findSharpCorners, measureShell } from './sharp-corners';
 import { SizeField } from './size-field';
 import type { Spoke } from './spokes';
 import { listSpokes, turnFrom } from './spokes';
@@ -22,7 +23,7 @@ export interface SizeSources {
   readonly corners: SizeSource[];
   /** Points along thin places. */
   readonly thin: SizeSource[];
-  /** Short segments, whose length no density changes. */
+  /** Short segments and sharp corners, which no density changes. */
   readonly forced: SizeSource[];
 }
 
@@ -37,7 +38,7 @@ export function listSizeSources(ground: Ground, ceiling: number): SizeSources {
   const corners = listCornerSources(ground, ceiling);
   const field = new SizeField(corners, 0.4, ceiling);
   const thin = listThinSources(ground, ceiling).filter(({ x, y, size }) => size < field.sizeAt(x, y));
-  return { corners, thin, forced: listShortSegments(ground, ceiling) };
+  return { corners, thin, forced: listForcedSources(ground, ceiling) };
 }
 
 function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
@@ -144,9 +145,13 @@ function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
   return sources;
 }
 
-// Short segments bring small elements with them; said beforehand, sizes grow from there in steps.
-function listShortSegments({ x, y, starts, ends }: Ground, ceiling: number): SizeSource[] {
+// Short segments and sharp corners bring small elements with them; said beforehand, sizes grow from there in steps.
+function listForcedSources(ground: Ground, ceiling: number): SizeSource[] {
+  const { x, y, starts, ends } = ground;
   const sources: SizeSource[] = [];
+  findSharpCorners(ground).forEach((sharp, v) => {
+    if (sharp) sources.push({ x: x[v], y: y[v], size: measureShell(ground, v) });
+  });
   starts.forEach((a, s) => {
     const b = ends[s];
     const size = Math.hypot(x[b] - x[a], y[b] - y[a]);
