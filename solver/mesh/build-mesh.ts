@@ -8,6 +8,7 @@ import type { MeshOptions, MeshOutcome } from './outcome';
 import { findMinAngle } from './quality';
 import { remarkOnGround, remarkOnPieces } from './remarks';
 import { refineGround } from './refine';
+import { smoothMesh } from './smooth';
 import type { SizeSource } from './size-field';
 import { FarField } from './far-field';
 import type { SizeSources } from './size-sources';
@@ -47,6 +48,7 @@ export function buildMesh(geometry: SectionGeometry, options: MeshOptions): Mesh
     const field = buildField(sources, extent.thickness, { options, factor, floor });
     const refined = refineGround(ground, field, { maxTriangles, floor });
     if (refined.status === 'refined') {
+      smoothMesh(ground.mesh, refined.segmentOf, 2);
       const mesh = assembleMesh(ground, options.order);
       const findings = [...remarks, ...remarkOnPieces(mesh, geometry)];
       if (attempt > 0)

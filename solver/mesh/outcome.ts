@@ -24,7 +24,7 @@ export type GeometryFindingCode =
   | 'near-gap'
   /** The density was lowered to stay below `maxElements`; `value` is the size factor used. */
   | 'element-limit'
-  /** The input itself has an angle below 25 degrees; `value` is that angle, degrees. */
+  /** The input itself has an angle below 26 degrees, which its triangles keep; `value` is that angle, degrees. */
   | 'small-angle'
   /** The ground is in several pieces between which no water can pass; `value` is their number. */
   | 'ground-in-pieces';

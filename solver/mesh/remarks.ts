@@ -7,7 +7,7 @@ import type { GeometryFinding } from './outcome';
 import type { Spoke } from './spokes';
 import { listSpokes, turnFrom } from './spokes';
 
-const sharpDegrees = 25;
+const sharpDegrees = 26;
 const nearRatio = 0.005;
 
 /**
