@@ -6,10 +6,12 @@ const leastPoints = 44;
 const mostPoints = 400;
 /** Error of linear interpolation halfway between two points, relative: under half of the 1 % promised. */
 const relativeTolerance = 0.004;
-/** The same relative to the largest value on the face, where the value itself is near zero. */
+/** The same relative to the largest average on the face, where the value itself is near zero. */
 const absoluteTolerance = 4e-4;
 /** Each point towards a corner stands at this part of the distance of the one before. */
 const cornerRatio = 0.7;
+/** The same at a singular corner: a line between points at r and 0.78 r misses r^(−1/2) by 0.6 % at most, whatever the mesh says. */
+const singularRatio = 0.78;
 /** Nearest point to a corner, relative to the run's length: the more where the gradient grows without bound. */
 const nearestPlace = 0.005;
 const nearestSingularPlace = 1e-4;
@@ -43,10 +45,8 @@ export function placeFacePoints(
   let gaps: Gap[] = places.flatMap((list, run) =>
     list.slice(1).map((to, i): Gap => ({ run, from: list[i], to })),
   );
-  const largest = [0, 1].map((k) =>
-    Math.max(
-      ...values.flatMap((map) => [...map.values()].map((v) => Math.abs(v[k])).filter(Number.isFinite)),
-    ),
+  const largest = Math.max(
+    ...values.flatMap((map) => [...map.values()].map(([, averaged]) => Math.abs(averaged))),
   );
   for (let pass = 0; pass < mostPasses && gaps.length > 0 && count < mostPoints; pass++) {
     const rough = gaps
@@ -81,8 +81,10 @@ function startPlaces(run: FaceRun, total: number): number[] {
   );
   for (const atEnd of [false, true]) {
     const corner = atEnd ? run.end : run.start;
-    const nearest = (corner.exponent < 1 ? nearestSingularPlace : nearestPlace) * run.length;
-    for (let r = even * cornerRatio; r > nearest; r *= cornerRatio) places.add(atEnd ? run.length - r : r);
+    const singular = corner.exponent < 1;
+    const nearest = (singular ? nearestSingularPlace : nearestPlace) * run.length;
+    const ratio = singular ? singularRatio : cornerRatio;
+    for (let r = even * ratio; r > nearest; r *= ratio) places.add(atEnd ? run.length - r : r);
   }
   return [...places].sort((a, b) => a - b);
 }
@@ -92,7 +94,7 @@ function judgeGap(
   { from, to }: Gap,
   run: FaceRun,
   values: ReadonlyMap<number, Values>,
-  largest: readonly number[],
+  largest: number,
   averageAt: (run: FaceRun, s: number) => number,
 ): { middle: number; value: Values; miss: number } {
   const middle = (from + to) / 2;
@@ -101,7 +103,7 @@ function judgeGap(
   let miss = 0;
   for (const k of [0, 1]) {
     const error = Math.abs(value[k] - (a[k] + b[k]) / 2);
-    const allowed = relativeTolerance * Math.abs(value[k]) + absoluteTolerance * largest[k];
+    const allowed = relativeTolerance * Math.abs(value[k]) + absoluteTolerance * largest;
     if (error > allowed * miss) miss = error / allowed;
   }
   return { middle, value, miss };

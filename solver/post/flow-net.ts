@@ -65,13 +65,9 @@ export function flowNet({
   const shapeFactor = flows ? discharge / (referencePermeability * loss) : 0;
   const channels = (drops * shapeFactor) / (kind === 'plane' ? 1 : 2 * Math.PI * radius);
   const headLevels = flows ? Array.from({ length: drops - 1 }, (_, i) => low + ((i + 1) * loss) / drops) : [];
-  const whole = Math.min(Math.ceil(channels) - 1, mostChannels);
-  const streamLevels = flows
-    ? Array.from(
-        { length: Math.max(0, whole) },
-        (_, i) => ((i + 1) * discharge) / Math.max(channels, whole + 1),
-      )
-    : [];
+  const lines = Math.min(Math.ceil(channels) - 1, mostChannels - 1);
+  const step = discharge / Math.min(channels, mostChannels);
+  const streamLevels = flows ? Array.from({ length: Math.max(0, lines) }, (_, i) => (i + 1) * step) : [];
   return {
     drops,
     channels,
@@ -83,7 +79,7 @@ export function flowNet({
   };
 }
 
-/** More seepage paths than this would fill the drawing: where the reference material is far tighter than what conducts. */
+/** More would fill the drawing, where the reference material is far tighter than what conducts: then wider equal channels are drawn. */
 const mostChannels = 60;
 
 function surveyGround(mesh: Mesh, materialCount: number): { material: number; radius: number } {

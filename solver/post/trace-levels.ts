@@ -20,7 +20,7 @@ const linearParts = [0, 1, 2];
  * Traces contour lines of a nodal field.
  *
  * Each tri6 is divided in four through its midsides; a line crosses the sides of the parts exactly where the quadratic field
- * has the level, so that on a side its place is exact and only its curvature within a part is straightened. A node at the level
+ * has the level, so that only its curvature within a part is straightened. A node at the level
  * counts as above it, which rules out branches. Higher values lie to the left of each line's direction.
  *
  * @param mesh - The mesh.
@@ -84,8 +84,8 @@ interface Segment {
 class CrossingFinder {
   readonly #mesh: Mesh;
   readonly #nodal: Float64Array;
-  /** Third value along a whole side, by the key of each of its halves: what makes crossings exact. */
-  readonly #sides = new Map<number, readonly [start: number, middle: number, end: number]>();
+  /** Value halfway along an edge of a part, by its key: with it the crossing of a quadratic is exact. */
+  readonly #halfway = new Map<number, number>();
 
   constructor(mesh: Mesh, nodal: Float64Array) {
     this.#mesh = mesh;
@@ -110,7 +110,7 @@ class CrossingFinder {
           segments,
         );
       }
-      if (order === 2) this.#noteSides(e);
+      if (order === 2) this.#noteHalfways(e);
     }
     return segments;
   }
@@ -130,32 +130,30 @@ class CrossingFinder {
   #placeBetween(a: number, b: number, key: number, level: number): number {
     const va = this.#nodal[a] - level;
     const vb = this.#nodal[b] - level;
+    const middle = this.#halfway.get(key);
     const linear = va / (va - vb);
-    const side = this.#sides.get(key);
-    if (!side) return linear;
-    const [start, middle, end] = side.map((n) => this.#nodal[n] - level);
-    // f(s) = c + b s + a s² over the whole side, s from 0 to 1; the root lies in the half that changes sign.
-    const curvature = 2 * (start + end - 2 * middle);
-    const slope = end - start - curvature;
-    const low = a === side[0] || b === side[0] ? 0 : 0.5;
-    const root = Math.sqrt(Math.max(0, slope * slope - 4 * curvature * start));
+    if (middle === undefined) return linear;
+    // f(t) = va + slope t + curvature t², of opposite signs at 0 and 1: one root between.
+    const curvature = 2 * (va + vb - 2 * (middle - level));
+    const slope = vb - va - curvature;
+    const root = Math.sqrt(Math.max(0, slope * slope - 4 * curvature * va));
     const q = -(slope + (slope < 0 ? -root : root)) / 2;
-    const inHalf = [q / curvature, start / q].find((s) => s >= low - 1e-12 && s <= low + 0.5 + 1e-12);
-    if (inHalf === undefined) return linear;
-    const local = Math.min(1, Math.max(0, 2 * (inHalf - low)));
-    const forward = low === 0 ? a === side[0] : b === side[2];
-    return forward ? local : 1 - local;
+    const inside = [va / q, q / curvature].find((t) => t >= 0 && t <= 1);
+    return inside ?? linear;
   }
 
-  #noteSides(e: number): void {
-    const { elements } = this.#mesh;
+  #noteHalfways(e: number): void {
+    const nodes = Array.from(this.#mesh.elements.subarray(6 * e, 6 * e + 6));
+    const value = nodes.map((n) => this.#nodal[n]);
     for (let s = 0; s < 3; s++) {
-      const start = elements[6 * e + s];
-      const end = elements[6 * e + ((s + 1) % 3)];
-      const middle = elements[6 * e + 3 + s];
-      const side = [start, middle, end] as const;
-      this.#sides.set(this.#keyOf(start, middle), side);
-      this.#sides.set(this.#keyOf(middle, end), side);
+      const [next, last] = [(s + 1) % 3, (s + 2) % 3];
+      const [start, middle, end] = [value[s], value[3 + s], value[next]];
+      this.#halfway.set(this.#keyOf(nodes[s], nodes[3 + s]), (3 * start + 6 * middle - end) / 8);
+      this.#halfway.set(this.#keyOf(nodes[3 + s], nodes[next]), (3 * end + 6 * middle - start) / 8);
+      // Between the midsides on both hands of corner s the shape functions are −⅛, −⅛ at the other corners, ½, ½, ¼ at midsides.
+      const inner =
+        (value[3 + s] + value[3 + last]) / 2 + value[3 + next] / 4 - (value[next] + value[last]) / 8;
+      this.#halfway.set(this.#keyOf(nodes[3 + s], nodes[3 + last]), inner);
     }
   }
 
