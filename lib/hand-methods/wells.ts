@@ -56,11 +56,11 @@ export function sichardtRadius(drawdown: number, permeability: number): number {
 /**
  * Computes the length of layer that a partly penetrating slot adds to a confined flow from both sides.
  *
- * The same, mirrored, is the length that an opening at one end of a cutoff adds: `E = −(2D/π) ln sin(πW/2D)`.
+ * `E = −(2D/π) ln sin(πW/2D)`, to be added on each side. An opening W at the foot of a cutoff is the same figure on either side: it adds 2E.
  *
  * @param penetration - W, or the height of the opening, m.
  * @param thickness - D, m.
- * @returns m; half of it for flow from one side.
+ * @returns m on each side; half of it where water comes from one side only.
  * @source Derived by conformal mapping; compare Mansur & Kaufman in Leonards (1962), ch. 3.
  */
 export function slotExtraLength(penetration: number, thickness: number): number {
