@@ -70,6 +70,26 @@ function worstError(
   return worst;
 }
 
+/** Root mean square difference between corner gradients and a given gradient. */
+function meanError(
+  mesh: Mesh,
+  corners: Float64Array,
+  g: readonly [Field, Field],
+  inside: (x: number, y: number) => boolean,
+): number {
+  let [sum, count] = [0, 0];
+  for (let e = 0; e < mesh.elementCount; e++) {
+    for (let c = 0; c < 3; c++) {
+      const n = mesh.elements[6 * e + c];
+      const [x, y] = [mesh.coordinates[2 * n], mesh.coordinates[2 * n + 1]];
+      if (!inside(x, y)) continue;
+      sum += (corners[6 * e + 2 * c] - g[0](x, y)) ** 2 + (corners[6 * e + 2 * c + 1] - g[1](x, y)) ** 2;
+      count++;
+    }
+  }
+  return Math.sqrt(sum / count);
+}
+
 const everywhere = (): boolean => true;
 
 describe('recoverGradients', () => {
@@ -108,11 +128,12 @@ describe('recoverGradients', () => {
     ).toBeLessThan(1e-10);
   });
 
-  it('is several times nearer to the truth than raw gradients, which it follows in order: e^x sin y sampled on two meshes', () => {
+  it('is several times nearer to the truth than raw gradients, with errors of second order or better: e^x sin y sampled on two meshes', () => {
     const inside = (x: number, y: number): boolean => x > 0.4 && x < 2.6 && y > 0.4 && y < 1.6;
     const gx: Field = (x, y) => Math.exp(x) * Math.sin(y);
     const gy: Field = (x, y) => Math.exp(x) * Math.cos(y);
-    const [coarse, fine] = [0.6, 0.3].map((factor) => {
+    // Root mean squares: the worst corner of an irregular mesh is a matter of luck. Three halvings show the order.
+    const [coarse, fine] = [0.8, 0.1].map((factor) => {
       const mesh = build(2, factor);
       const heads = sample(mesh, (x, y) => Math.exp(x) * Math.sin(y));
       const raw = new Float64Array(6 * mesh.elementCount);
@@ -125,13 +146,13 @@ describe('recoverGradients', () => {
           raw.set(gradientAt(mesh, heads, { element, xi, eta }), 6 * element + 2 * c);
         }
       }
-      const recovered = worstError(mesh, recoverGradients(mesh, [sand], heads), gx, gy, inside);
-      return { nodes: mesh.nodeCount, recovered, raw: worstError(mesh, raw, gx, gy, inside) };
+      const recovered = meanError(mesh, recoverGradients(mesh, [sand], heads), [gx, gy], inside);
+      return { nodes: mesh.nodeCount, recovered, raw: meanError(mesh, raw, [gx, gy], inside) };
     });
     expect(coarse.raw / coarse.recovered).toBeGreaterThan(4);
     expect(fine.raw / fine.recovered).toBeGreaterThan(4);
     const rate = Math.log(coarse.recovered / fine.recovered) / Math.log(Math.sqrt(fine.nodes / coarse.nodes));
-    expect(rate).toBeGreaterThan(1.8);
+    expect(rate).toBeGreaterThan(1.9);
   });
 
   it('keeps the jump of the gradient where permeability changes', () => {
