@@ -128,7 +128,7 @@ describe('recoverGradients', () => {
     ).toBeLessThan(1e-10);
   });
 
-  it('is several times nearer to the truth than raw gradients, with errors of second order or better: e^x sin y sampled on two meshes', () => {
+  it('is several times nearer to the truth than raw gradients, with errors of third order, one above theirs: e^x sin y sampled on two meshes', () => {
     const inside = (x: number, y: number): boolean => x > 0.4 && x < 2.6 && y > 0.4 && y < 1.6;
     const gx: Field = (x, y) => Math.exp(x) * Math.sin(y);
     const gy: Field = (x, y) => Math.exp(x) * Math.cos(y);
@@ -152,7 +152,7 @@ describe('recoverGradients', () => {
     expect(coarse.raw / coarse.recovered).toBeGreaterThan(4);
     expect(fine.raw / fine.recovered).toBeGreaterThan(4);
     const rate = Math.log(coarse.recovered / fine.recovered) / Math.log(Math.sqrt(fine.nodes / coarse.nodes));
-    expect(rate).toBeGreaterThan(1.9);
+    expect(rate).toBeGreaterThan(2.7);
   });
 
   it('keeps the jump of the gradient where permeability changes', () => {
