@@ -3,7 +3,7 @@ import { restoreDelaunay } from './delaunay';
 import type { Triangulation } from './triangulation';
 
 /**
- * Moves free vertices to the mean of their neighbours where that improves the worst triangle round them.
+ * Moves free vertices to the mean of their neighbours where that widens the smallest angle round them.
  *
  * @param mesh - A refined triangulation; changed in place, Delaunay again afterwards.
  * @param segmentOf - −1 for vertices that may move.
@@ -42,7 +42,7 @@ function meanOfRing(mesh: Triangulation, v: number): [number, number] {
   return [sx / count, sy / count];
 }
 
-// Least over the triangles round a vertex of area over the sum of squared sides; negative where one is inverted.
+// Least over the triangles round a vertex of the squared sine of the smallest angle; negative where one is inverted.
 function judgeStar(mesh: Triangulation, v: number): number {
   const { x, y, corners, neighbours } = mesh;
   let least = Infinity;
@@ -51,9 +51,12 @@ function judgeStar(mesh: Triangulation, v: number): number {
   do {
     const [a, b, c] = [corners[3 * t], corners[3 * t + 1], corners[3 * t + 2]];
     const [ux, uy, wx, wy] = [x[b] - x[a], y[b] - y[a], x[c] - x[a], y[c] - y[a]];
-    const [zx, zy] = [ux - wx, uy - wy];
-    const quality = (ux * wy - uy * wx) / (ux * ux + uy * uy + wx * wx + wy * wy + zx * zx + zy * zy);
-    least = Math.min(least, quality);
+    const twice = ux * wy - uy * wx;
+    const uu = ux * ux + uy * uy;
+    const ww = wx * wx + wy * wy;
+    const zz = (ux - wx) * (ux - wx) + (uy - wy) * (uy - wy);
+    const longest = (uu * ww * zz) / Math.min(uu, ww, zz); // squared product of the two longer sides
+    least = Math.min(least, (twice * Math.abs(twice)) / longest);
     t = neighbours[3 * t + ((mesh.sideFrom(t, v) + 2) % 3)];
   } while (t !== first);
   return least;
