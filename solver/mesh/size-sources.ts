@@ -73,7 +73,9 @@ function findExponent(spokes: readonly Spoke[]): number | null {
     const alike = from.condition === to.condition;
     let exponent = (alike ? 1 : 0.5) * (Math.PI / angle);
     if (inner > 0 && Math.abs(exponent - 1) > 0.02) exponent *= 0.8;
-    const foot = (!alike || inner > 0) && exponent > 0.95 && exponent < 1.05; // regular, but gradients are read here: a wall, or another soil
+    // Regular, but gradients are read here: a wall's foot, or another soil under a face that carries a condition.
+    const isRead = !alike || (inner > 0 && from.condition >= 0);
+    const foot = isRead && exponent > 0.95 && exponent < 1.05;
     if (exponent < footExponent) least = Math.min(least, exponent);
     else if (foot) least = Math.min(least, footExponent);
   });
