@@ -48,3 +48,4 @@ export {
   reserveFactor,
 } from './sparse/factorize';
 export { solve } from './sparse/solve';
+export { type MatrixMarketOutcome, readMatrixMarket } from './sparse/matrix-market';
