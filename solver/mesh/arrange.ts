@@ -168,7 +168,7 @@ function cutAtVertices(
   snap: number,
   add: (piece: number, vertex: number) => void,
 ): void {
-  const used = [...new Set([...a, ...b])].sort((p, q) => x[p] - x[q] || p - q);
+  const used = x.map((_, v) => v).sort((p, q) => x[p] - x[q] || p - q); // also points that end no piece
   const sortedX = used.map((v) => x[v]);
   for (let i = 0; i < a.length; i++) {
     const right = Math.max(x[a[i]], x[b[i]]) + snap;
