@@ -1,8 +1,7 @@
 // What every check shares: its input, the choice of a criterion, the verdict.
 import type { Criterion, CriterionQuantity } from '@/lib/domain/criteria';
 import type { CheckResult, SituationResult, Verdict, WorkingLine } from '@/lib/domain/result';
-import type { Material, SectionDocument, Situation } from '@/lib/domain/section';
-import { isInRing } from '@/lib/domain/ground';
+import type { SectionDocument, Situation } from '@/lib/domain/section';
 
 /** What checks read. */
 export interface CheckInput {
@@ -76,21 +75,6 @@ export function workingLine(
   formula?: string,
 ): WorkingLine {
   return { symbol, meaning, value, unit, ...(formula === undefined ? {} : { formula }) };
-}
-
-/**
- * Finds the material at a point: the last zone painted there.
- *
- * @param document - The section.
- * @param x - Metres.
- * @param y - Metres.
- * @returns The material, or null outside the ground.
- */
-export function materialAt(document: SectionDocument, x: number, y: number): Material | null {
-  const zone = document.zones.findLast(
-    ({ outline, holes }) => isInRing(outline, x, y) && !(holes ?? []).some((hole) => isInRing(hole, x, y)),
-  );
-  return document.materials.find((material) => material.id === zone?.material) ?? null;
 }
 
 /**

@@ -1,9 +1,10 @@
+import { materialAt } from '@/lib/domain/ground-column';
 import { describeObject } from '@/lib/domain/describe';
 import type { Criterion } from '@/lib/domain/criteria';
 import type { CheckResult } from '@/lib/domain/result';
 import type { Material, Structure } from '@/lib/domain/section';
 import { levelOf } from '@/lib/domain/validate-conditions';
-import { type CheckInput, citeBoth, judge, materialAt, workingLine } from './check';
+import { type CheckInput, citeBoth, judge, workingLine } from './check';
 
 const method = 'Lane (1935), Security from under-seepage: masonry dams on earth foundations, Trans. ASCE 100';
 

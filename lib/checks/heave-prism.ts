@@ -1,107 +1,29 @@
-import { distanceToPath } from '@/lib/domain/ground';
 import type { CheckResult, WorkingLine } from '@/lib/domain/result';
-import type { Barrier, Edge, Point } from '@/lib/domain/section';
-import { levelOf } from '@/lib/domain/validate-conditions';
 import { waterUnitWeight } from '@/solver';
-import {
-  type CheckInput,
-  chooseCriterion,
-  citeBoth,
-  incomplete,
-  judge,
-  materialAt,
-  workingLine,
-} from './check';
+import { type CheckInput, chooseCriterion, citeBoth, incomplete, judge, workingLine } from './check';
+import { averageHead, findPrisms, type PrismWeight, type SoilPrism, weighPrism } from './soil-prism';
 
 const method =
   'Terzaghi (1943), Theoretical Soil Mechanics, art. 94; Terzaghi & Peck (1948), Soil Mechanics in Engineering Practice';
 
-/** The soil prism in front of a wall: embedded depth D below the bed, width D/2. */
-interface Prism {
-  readonly wall: Barrier;
-  readonly edge: Edge;
-  /** Where the wall meets the bed. */
-  readonly foot: Point;
-  /** +1 where the bed lies to the right of the wall. */
-  readonly direction: 1 | -1;
-  readonly depth: number;
-  readonly width: number;
-  /** Head on the bed, m. */
-  readonly bedHead: number;
-}
+const caution =
+  'Two forms of one equilibrium, both in use, with different margins: the total form also carries the water at rest in weight and pressure. A factor for one does not apply to the other.';
 
 /**
  * Checks heave of the soil prism in front of every wall with an outflow bed beside it, in total and in effective form.
  *
- * Effective: F = W′ / (γw h_a), with the average excess head h_a over the prism's base; total: F = (W + water above) / u. Both are
+ * Effective: F = W′ / (γw h_a), with the average excess head h_a over the prism's base; total: F = (W + w) / u. Both are
  * allowed by practice and give different margins, so both stand.
  *
  * @param input - Document, result and criteria.
  * @returns Two checks per prism.
- * @source Terzaghi (1943), art. 94.
+ * @source Terzaghi (1943), art. 94; Terzaghi & Peck (1948).
  */
 export function checkHeavePrisms(input: CheckInput): CheckResult[] {
   return findPrisms(input).flatMap((prism) => checkPrism(input, prism));
 }
 
-function findPrisms({ document, situation, result }: CheckInput): Prism[] {
-  return document.barriers.flatMap((wall) => {
-    const tip = wall.path.reduce((low, p) => (p[1] < low[1] ? p : low));
-    return result.exit.flatMap((face): Prism[] => {
-      const edge = document.edges.find(({ id }) => id === face.edge)!;
-      const bedHead = levelOf(edge.condition, situation);
-      const scale = 1e-6 * Math.max(...edge.path.map(([x, y]) => Math.abs(x) + Math.abs(y)), 1);
-      const end = [edge.path[0]!, edge.path.at(-1)!].find(
-        ([x, y]) => distanceToPath(x, y, wall.path) <= scale,
-      );
-      if (!end || bedHead === null) return [];
-      const isFirst = end === edge.path[0];
-      const next = isFirst ? edge.path[1]! : edge.path.at(-2)!;
-      // a bed rises or falls gently away from the wall; anything steeper is another shape of failure
-      if (Math.abs(next[1] - end[1]) > 0.2 * Math.abs(next[0] - end[0])) return [];
-      const depth = end[1] - tip[1];
-      if (depth <= scale || Math.abs(tip[0] - end[0]) > 0.05 * depth) return [];
-      const width = Math.min(depth / 2, Math.abs(next[0] - end[0]));
-      const direction = next[0] > end[0] ? 1 : -1;
-      return [{ wall, edge, foot: end, direction, depth, width, bedHead }];
-    });
-  });
-}
-
-/** Average head over the prism's base; points gather towards the wall, where the head changes as the root of the distance. */
-function averageHead({ probe }: CheckInput, { foot, direction, depth, width }: Prism): number | null {
-  const steps = 64;
-  let sum = 0;
-  for (let i = 0; i < steps; i++) {
-    const t = (i + 0.5) / steps;
-    const head = probe.headAt(foot[0] + direction * width * t * t, foot[1] - depth);
-    if (head === null) return null;
-    sum += (head * 2 * t) / steps;
-  }
-  return sum;
-}
-
-/** Average total weight over the prism, kPa at its base; the name of a material without unit weight instead. */
-function averageWeight(
-  { document }: CheckInput,
-  { foot, direction, depth, width }: Prism,
-): number | { missing: string } {
-  const columns = 8;
-  const rows = 64;
-  let sum = 0;
-  for (let i = 0; i < columns; i++) {
-    for (let j = 0; j < rows; j++) {
-      const x = foot[0] + (direction * width * (i + 0.5)) / columns;
-      const soil = materialAt(document, x, foot[1] - (depth * (j + 0.5)) / rows);
-      if (soil?.saturatedUnitWeight === undefined)
-        return { missing: soil?.name ?? 'the ground in front of the wall' };
-      sum += soil.saturatedUnitWeight;
-    }
-  }
-  return (sum * depth) / (columns * rows);
-}
-
-function checkPrism(input: CheckInput, prism: Prism): CheckResult[] {
+function checkPrism(input: CheckInput, prism: SoilPrism): CheckResult[] {
   const effective = chooseCriterion(input.criteria, 'heave-prism-effective');
   const total = chooseCriterion(input.criteria, 'heave-prism-total');
   const subject = prism.wall.id;
@@ -121,59 +43,93 @@ function checkPrism(input: CheckInput, prism: Prism): CheckResult[] {
       source: citeBoth(method, total),
     },
   ] as const;
-  const head = averageHead(input, prism);
+  const head = averageHead(prism, input.probe);
   if (head === null)
     return bases.map((base) => incomplete(base, 'The prism reaches beyond the drawn ground.'));
-  const weight = averageWeight(input, prism);
-  if (typeof weight !== 'number') {
+  const weight = weighPrism(input.document, prism);
+  if ('missing' in weight) {
     return bases.map((base) =>
       incomplete(base, `Enter the saturated unit weight of “${weight.missing}” to weigh the prism.`),
     );
   }
   const excess = head - prism.bedHead;
-  const water = Math.max(0, prism.bedHead - prism.foot[1]) * waterUnitWeight;
+  if (excess <= 0) {
+    const remark = 'No excess head stands on the base of the prism: nothing lifts it.';
+    return bases.map((base) => ({
+      ...base,
+      value: null,
+      required: null,
+      verdict: 'not-applicable',
+      remark,
+      working: [],
+    }));
+  }
   const pressure = waterUnitWeight * (head - prism.foot[1] + prism.depth);
-  const submerged = weight - waterUnitWeight * prism.depth;
-  const shared = sharedLines(prism, weight);
-  const factorEffective = excess > 0 ? submerged / (waterUnitWeight * excess) : Number.POSITIVE_INFINITY;
-  const factorTotal = (weight + water) / pressure;
-  const remark =
-    'The prism of half the embedment in width is the customary one; narrower or shallower prisms can be more critical. Both forms are allowed and differ; the effective form is the more telling one.';
-  return [
-    {
-      ...bases[0],
-      value: Number.isFinite(factorEffective) ? factorEffective : null,
-      required: effective?.required ?? null,
-      verdict: judge(factorEffective, effective?.required ?? null),
-      remark,
-      working: [
-        ...shared,
-        workingLine('W′', 'submerged weight over the base', submerged, 'kPa', 'W − γw D'),
-        workingLine('h_a', 'average excess head over the base, above the bed’s head', excess, 'm'),
-        workingLine('F', 'factor', factorEffective, '', 'W′ / (γw h_a)'),
-      ],
-    },
-    {
-      ...bases[1],
-      value: factorTotal,
-      required: total?.required ?? null,
-      verdict: judge(factorTotal, total?.required ?? null),
-      remark,
-      working: [
-        ...shared,
-        workingLine('w', 'water standing on the bed', water, 'kPa', 'γw (level − bed)'),
-        workingLine('u', 'average water pressure on the base', pressure, 'kPa'),
-        workingLine('F', 'factor', factorTotal, '', '(W + w) / u'),
-      ],
-    },
-  ];
+  const factorEffective = weight.submerged / (waterUnitWeight * excess);
+  const factorTotal = (weight.total + weight.water) / pressure;
+  const lines = layOut(prism, weight, { head, excess, pressure, factorEffective, factorTotal });
+  const values = [factorEffective, factorTotal];
+  const remarks = [`${caution}${warnShallower(input, prism, factorEffective)}`, caution];
+  return bases.map((base, i) => ({
+    ...base,
+    value: values[i]!,
+    required: [effective, total][i]?.required ?? null,
+    verdict: judge(values[i]!, [effective, total][i]?.required ?? null),
+    remark: remarks[i]!,
+    working: lines,
+  }));
 }
 
-function sharedLines({ depth, width }: Prism, weight: number): WorkingLine[] {
+interface Forces {
+  readonly head: number;
+  readonly excess: number;
+  readonly pressure: number;
+  readonly factorEffective: number;
+  readonly factorTotal: number;
+}
+
+/** Both forms side by side, in either check. */
+function layOut({ depth, width, bedHead }: SoilPrism, weight: PrismWeight, forces: Forces): WorkingLine[] {
   return [
     workingLine('D', 'embedment below the bed', depth, 'm'),
     workingLine('b', 'width of the prism', width, 'm', 'D / 2, no wider than the bed'),
-    workingLine('W', 'total weight over the base', weight, 'kPa', 'Σ γsat t'),
+    workingLine('W', 'total weight over the base', weight.total, 'kPa', 'Σ γsat t'),
+    workingLine('W′', 'submerged weight over the base', weight.submerged, 'kPa', 'Σ (γsat − γw) t'),
+    workingLine('w', 'water standing on the bed', weight.water, 'kPa', 'γw (level − bed)'),
     workingLine('γw', 'unit weight of water', waterUnitWeight, 'kN/m³'),
+    workingLine('h', 'average head over the base', forces.head, 'm'),
+    workingLine('h_b', 'head on the bed', bedHead, 'm'),
+    workingLine('h_a', 'average excess head', forces.excess, 'm', 'h − h_b'),
+    workingLine(
+      'u',
+      'average water pressure on the base',
+      forces.pressure,
+      'kPa',
+      'γw (h − elevation of the base)',
+    ),
+    workingLine('F′', 'factor, effective form', forces.factorEffective, '', 'W′ / (γw h_a)'),
+    workingLine('F', 'factor, total form', forces.factorTotal, '', '(W + w) / u'),
   ];
+}
+
+/** Parts of the embedment tried as depth of a prism. */
+const parts = [0.25, 0.375, 0.5, 0.625, 0.75, 0.875] as const;
+
+/** A shallower prism can be nearer to heave, in layered ground above all; it is named where its factor is less by more than 2 %. */
+function warnShallower(input: CheckInput, prism: SoilPrism, factor: number): string {
+  let least = { factor, depth: prism.depth };
+  for (const part of parts) {
+    const shallow = {
+      ...prism,
+      depth: part * prism.depth,
+      width: Math.min(prism.width, (part * prism.depth) / 2),
+    };
+    const head = averageHead(shallow, input.probe);
+    const weight = weighPrism(input.document, shallow);
+    if (head === null || 'missing' in weight || head <= prism.bedHead) continue;
+    const found = weight.submerged / (waterUnitWeight * (head - prism.bedHead));
+    if (found < least.factor) least = { factor: found, depth: shallow.depth };
+  }
+  if (least.factor >= 0.98 * factor) return '';
+  return ` A shallower prism, ${least.depth.toFixed(2)} m deep and half as wide, has a factor of ${least.factor.toFixed(2)} only.`;
 }

@@ -3,6 +3,7 @@ import type { CheckResult } from '@/lib/domain/result';
 import type { CheckInput } from './check';
 import { checkCreep } from './creep';
 import { checkExitGradients } from './exit-gradient';
+import { checkFragments } from './fragments';
 import { checkFlotation } from './flotation';
 import { checkHeavePrisms } from './heave-prism';
 
@@ -14,8 +15,10 @@ export { exampleCriteria } from './example-criteria';
  * Runs every check that a situation calls for.
  *
  * @param input - Document, situation, result and criteria.
- * @returns The checks in a fixed order: exit gradient, heave, flotation, creep.
+ * @returns The checks in a fixed order: exit gradient, heave, flotation, creep, the comparison by hand.
  */
 export function runChecks(input: CheckInput): CheckResult[] {
-  return [checkExitGradients, checkHeavePrisms, checkFlotation, checkCreep].flatMap((check) => check(input));
+  return [checkExitGradients, checkHeavePrisms, checkFlotation, checkCreep, checkFragments].flatMap((check) =>
+    check(input),
+  );
 }
