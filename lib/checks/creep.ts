@@ -38,8 +38,8 @@ export function checkCreep(input: CheckInput): CheckResult[] {
     const value = creepPath.weighted / loss;
     const who = describeObject('structures', index, structure);
     const remark = criterion
-      ? `Empirical; never used alone for a permanent work. The soil class “${criterion.soil ?? 'any'}” ${soil?.grading?.d50 === undefined ? 'is the practice’s own' : `follows from d50 = ${soil.grading.d50} mm`}. Walls closer together than half the path between their tips need the shorter path across.`
-      : `${who}: enter d50 of the soil under the base, or adopt one creep ratio in the criteria library, to compare this value.`;
+      ? `An old rule of thumb; never used alone for a permanent work. The soil class “${criterion.soil ?? 'any'}” ${sayHowChosen(soil, criterion)}. Walls closer together than half the path between their tips need the shorter path across.`
+      : `${who}: enter d50 of the soil under the base, or adopt one creep ratio in the criteria library, to compare this value. ${listRatios(input.criteria, value)}`;
     return {
       id: 'creep-lane',
       title: 'Weighted creep ratio',
@@ -68,14 +68,54 @@ function soilUnder({ document }: CheckInput, { base }: Structure): Material | nu
   return materialAt(document, (a[0] + b[0]) / 2, low - 1e-3 * span);
 }
 
-/** One adopted ratio speaks for all soils; otherwise the class of the soil's median size decides. */
+/** One adopted ratio speaks for all soils; otherwise the class of the soil's median size decides, or its name. */
 function chooseBySoil(criteria: readonly Criterion[], soil: Material | null): Criterion | null {
   const ratios = criteria.filter(({ quantity }) => quantity === 'creep-lane');
   const adopted = ratios.filter(({ example }) => !example);
   if (adopted.length === 1) return adopted[0]!;
-  const d50 = soil?.grading?.d50;
-  if (d50 === undefined) return null;
-  const wanted = soilBySize.find(([upTo]) => d50 <= upTo)![1];
   const pool = adopted.length > 0 ? adopted : ratios;
-  return pool.find((criterion) => criterion.soil === wanted) ?? null;
+  const d50 = soil?.grading?.d50;
+  if (d50 !== undefined) {
+    const wanted = soilBySize.find(([upTo]) => d50 <= upTo)![1];
+    return pool.find((criterion) => criterion.soil === wanted) ?? null;
+  }
+  return soil ? chooseByName(pool, soil.name) : null;
+}
+
+/** The longest soil class that stands word for word in the material's name, so that “very fine sand” is not “fine sand”. */
+function chooseByName(pool: readonly Criterion[], name: string): Criterion | null {
+  const words = ` ${name
+    .toLowerCase()
+    .replace(/[^a-z]+/g, ' ')
+    .trim()} `;
+  const fits = pool.flatMap((criterion) =>
+    (criterion.soil ?? '')
+      .toLowerCase()
+      .split(/ or | including | with /)
+      .slice(0, 2)
+      .filter((soil) => soil !== '' && words.includes(` ${soil} `))
+      .map((soil) => ({ criterion, length: soil.length })),
+  );
+  return (
+    fits.reduce<(typeof fits)[number] | null>(
+      (best, fit) => (best && best.length >= fit.length ? best : fit),
+      null,
+    )?.criterion ?? null
+  );
+}
+
+function sayHowChosen(soil: Material | null, criterion: Criterion): string {
+  if (!criterion.example) return 'is the practice’s own';
+  const d50 = soil?.grading?.d50;
+  return d50 === undefined ? `follows from the name “${soil?.name ?? ''}”` : `follows from d50 = ${d50} mm`;
+}
+
+/** Which soils of the library the ratio would do for. */
+function listRatios(criteria: readonly Criterion[], value: number): string {
+  const ratios = criteria.filter(({ quantity, soil }) => quantity === 'creep-lane' && soil !== undefined);
+  const least = ratios.filter(({ required }) => value >= required).sort((a, b) => b.required - a.required)[0];
+  if (ratios.length === 0) return '';
+  return least
+    ? `The ratio would do down to “${least.soil}” (${least.required}).`
+    : 'The ratio would do for none of the soils in the library.';
 }

@@ -26,6 +26,27 @@ export const exampleCriteria: readonly Criterion[] = [
     `Harr (1962), Groundwater and Seepage; ${fromMemory}`,
   ),
   example(
+    'example-exit-gradient-cedergren',
+    'exit-gradient-factor',
+    2.5,
+    'Factor on the exit gradient, 2.5 to 3',
+    `Cedergren (1989), Seepage, Drainage, and Flow Nets; ${fromMemory}`,
+  ),
+  example(
+    'example-exit-gradient-sheet-pile',
+    'exit-gradient-factor',
+    3,
+    'Factor on the exit gradient beside sheet piles without a filter, 3',
+    `EM 1110-2-2504, Design of Sheet Pile Walls; ${fromMemory}`,
+  ),
+  example(
+    'example-exit-gradient-excavation',
+    'exit-gradient-factor',
+    1.5,
+    'Factor on piping in sheeted excavations, 1.5 to 2',
+    `NAVFAC DM-7.1, ch. 6, as quoted in Bond & Harris (2008), Decoding Eurocode 7; attribution from memory.`,
+  ),
+  example(
     'example-exit-averaged',
     'exit-gradient-averaged-factor',
     3,
@@ -38,6 +59,13 @@ export const exampleCriteria: readonly Criterion[] = [
     1.5,
     'Heave of the prism, effective form, 1.5 to 2',
     `NAVFAC DM-7.1, ch. 6, as quoted in Bond & Harris (2008), Decoding Eurocode 7; attribution from memory.`,
+  ),
+  example(
+    'example-heave-effective-ec7',
+    'heave-prism-effective',
+    1.5,
+    'Heave of the prism, effective form, partial factors as one',
+    `EN 1997-1:2004, 2.4.7.5 (HYD), equation 2.9b and table A.17: γG;dst/γG;stb = 1.35/0.90 = 1.5 as one factor, as in Bond & Harris (2008), Decoding Eurocode 7; table ${fromMemory}`,
   ),
   example(
     'example-heave-total',
@@ -53,6 +81,13 @@ export const exampleCriteria: readonly Criterion[] = [
     'Flotation, weight over uplift',
     `EN 1997-1:2004, table A.15: γG;dst/γG;stb = 1.0/0.9 ≈ 1.1 as one factor; ${fromMemory}`,
   ),
+  example(
+    'example-flotation-usual',
+    'flotation',
+    1.3,
+    'Flotation, usual loading, 1.3',
+    `EM 1110-2-2100 (2005), Stability Analysis of Concrete Structures (1.2 unusual, 1.1 extreme); ${fromMemory}`,
+  ),
   ...(
     [
       ['silt', 'Very fine sand or silt', 8.5],
@@ -66,6 +101,7 @@ export const exampleCriteria: readonly Criterion[] = [
       ['soft-clay', 'Soft clay', 3],
       ['medium-clay', 'Medium clay', 2],
       ['hard-clay', 'Hard clay', 1.8],
+      ['hardpan', 'Very hard clay or hardpan', 1.6],
     ] as const
   ).map(([id, soil, ratio]) =>
     example(
