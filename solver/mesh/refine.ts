@@ -18,8 +18,8 @@ const leastSine = Math.sin((25.5 * Math.PI) / 180);
 /** Off-centres make the new triangle's apex angle a little above the least angle. */
 const offCentreReach = 0.5 / Math.tan((29 * Math.PI) / 360);
 const sizeSlack = 1.25;
-/** Chord of 26 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
-const sharpChord = 2 * Math.sin((13 * Math.PI) / 180);
+/** Chord of 16 degrees: corners below it keep their narrow triangles, wider ones are refined like any other place. */
+const sharpChord = 2 * Math.sin((8 * Math.PI) / 180);
 
 /** The refined triangulation's vertices, or how many triangles it would have taken. */
 export type RefineOutcome =
