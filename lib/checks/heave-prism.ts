@@ -131,5 +131,5 @@ function warnShallower(input: CheckInput, prism: SoilPrism, factor: number): str
     if (found < least.factor) least = { factor: found, depth: shallow.depth };
   }
   if (least.factor >= 0.98 * factor) return '';
-  return ` A shallower prism, ${least.depth.toFixed(2)} m deep and half as wide, has a factor of ${least.factor.toFixed(2)} only.`;
+  return ` A shallower prism, ${least.depth.toFixed(2)} m deep and half as wide, has the lesser factor of ${least.factor.toFixed(2)} in the effective form.`;
 }

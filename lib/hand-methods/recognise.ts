@@ -30,37 +30,114 @@ export type Recognition =
  * @source Harr (1962), ch. 6 (conditions of the method); Samsioe (1931), Casagrande (1937) (transformed section).
  */
 export function recogniseSection(document: SectionDocument, situation: Situation): Recognition {
+  return catchReason(() => {
+    const axes = readGround(document).map(readAxes);
+    const [first] = axes;
+    requireThat(first !== undefined, 'There is no ground.');
+    requireThat(
+      axes.every((one) => isSame(one, first)),
+      mixed,
+    );
+    return { status: 'covered', section: layOutWith(document, situation, first) };
+  });
+}
+
+/** Two uniform sections that enclose a mixed one, or the reason why not. */
+export type BoundRecognition =
+  | { readonly status: 'covered'; readonly low: RecognisedSection; readonly high: RecognisedSection }
+  | { readonly status: 'not-covered'; readonly reason: string };
+
+/** Beyond this contrast the two enclosing discharges say nothing about the one between. */
+const greatestContrast = 30;
+
+/**
+ * Encloses a section of mixed ground between two uniform ones: all of it as tight as its tightest part, and as loose as its loosest.
+ *
+ * Raising a permeability anywhere never lowers the discharge between two levels, so its discharge lies between theirs.
+ *
+ * @param document - The section.
+ * @param situation - Gives the levels.
+ * @returns Both, or the reason why the section is not covered.
+ * @source Rayleigh's monotonicity; Pólya & Szegő (1951), Isoperimetric Inequalities in Mathematical Physics, ch. 2.
+ */
+export function recogniseBounds(document: SectionDocument, situation: Situation): BoundRecognition {
+  return catchReason(() => {
+    const axes = readGround(document).map(encloseAxes);
+    const low = {
+      kx: Math.min(...axes.map((one) => one.low.kx)),
+      kz: Math.min(...axes.map((one) => one.low.kz)),
+    };
+    const high = {
+      kx: Math.max(...axes.map((one) => one.high.kx)),
+      kz: Math.max(...axes.map((one) => one.high.kz)),
+    };
+    requireThat(
+      Math.max(high.kx / low.kx, high.kz / low.kz) <= greatestContrast,
+      'The permeabilities of the ground differ too much for the method, which takes one uniform layer.',
+    );
+    return {
+      status: 'covered',
+      low: layOutWith(document, situation, low),
+      high: layOutWith(document, situation, high),
+    };
+  });
+}
+
+/** Permeability along x and upward, m/s. */
+interface Axes {
+  readonly kx: number;
+  readonly kz: number;
+}
+
+const mixed = 'The ground has more than one permeability; the method takes one uniform layer.';
+
+function isSame(a: Axes, b: Axes): boolean {
+  return Math.abs(a.kx / b.kx - 1) < 1e-9 && Math.abs(a.kz / b.kz - 1) < 1e-9;
+}
+
+function catchReason<T>(read: () => T): T | { readonly status: 'not-covered'; readonly reason: string } {
   try {
-    const { permeability, horizontalScale } = readPermeability(document);
-    const layout = readLayout(document, situation, horizontalScale);
-    return { status: 'covered', section: { ...assembleFragments(layout), permeability, horizontalScale } };
+    return read();
   } catch (reason) {
     if (reason instanceof NotCovered) return { status: 'not-covered', reason: reason.reason };
     throw reason;
   }
 }
 
-function readPermeability(document: SectionDocument): { permeability: number; horizontalScale: number } {
+function readGround(document: SectionDocument): Material[] {
   requireThat(document.geometry === 'plane', 'The method is for plane sections.');
-  const used = document.zones.map(({ material }) => document.materials.find(({ id }) => id === material)!);
-  const axes = used.map(readAxes);
-  const [first] = axes;
-  requireThat(first !== undefined, 'There is no ground.');
-  const isSame = axes.every(
-    ({ kx, kz }) => Math.abs(kx / first.kx - 1) < 1e-9 && Math.abs(kz / first.kz - 1) < 1e-9,
-  );
-  requireThat(isSame, 'The ground has more than one permeability; the method takes one uniform layer.');
-  return { permeability: Math.sqrt(first.kx * first.kz), horizontalScale: Math.sqrt(first.kz / first.kx) };
+  return document.zones.map(({ material }) => document.materials.find(({ id }) => id === material)!);
 }
 
-function readAxes({ name, kMajor, kMinor, angle }: Material): { kx: number; kz: number } {
+function layOutWith(document: SectionDocument, situation: Situation, { kx, kz }: Axes): RecognisedSection {
+  const horizontalScale = Math.sqrt(kz / kx);
+  const layout = readLayout(document, situation, horizontalScale);
+  return { ...assembleFragments(layout), permeability: Math.sqrt(kx * kz), horizontalScale };
+}
+
+/** Level and upright axes as they are; inclined ones between two circles, which enclose their ellipse. */
+function encloseAxes(material: Material): { low: Axes; high: Axes } {
+  const { kMajor, kMinor } = material;
+  if (isUpright(material)) {
+    const axes = readAxes(material);
+    return { low: axes, high: axes };
+  }
+  const [low, high] = [Math.min(kMajor, kMinor), Math.max(kMajor, kMinor)];
+  return { low: { kx: low, kz: low }, high: { kx: high, kz: high } };
+}
+
+function isUpright({ kMajor, kMinor, angle }: Material): boolean {
   const turns = angle / 90;
-  const isUpright = Math.abs(turns - Math.round(turns)) < 1e-6;
+  return kMajor === kMinor || Math.abs(turns - Math.round(turns)) < 1e-6;
+}
+
+function readAxes(material: Material): Axes {
+  const { name, kMajor, kMinor, angle } = material;
   requireThat(
-    isUpright || kMajor === kMinor,
+    isUpright(material),
     `The axes of “${name}” are inclined; the transformed section needs them level and upright.`,
   );
-  return Math.round(turns) % 2 === 0 ? { kx: kMajor, kz: kMinor } : { kx: kMinor, kz: kMajor };
+  return Math.round(angle / 90) % 2 === 0 ? { kx: kMajor, kz: kMinor } : { kx: kMinor, kz: kMajor };
 }
 
 function readLayout(document: SectionDocument, situation: Situation, horizontalScale: number): Layout {

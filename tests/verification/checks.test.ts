@@ -201,19 +201,53 @@ describe('method of fragments beside the numbers (Pavlovsky 1935; Harr 1962, ch.
   const uncovered: readonly (readonly [string, SectionInput, RegExp])[] = [
     ['a round pit', { ...pit, geometry: 'axisymmetric' }, /plane sections/],
     ['a leaking wall', buildWeir({ thickness: 1, walls: [{ x: 0, depth: 0.5, conductance: 0.1 }], extent: 6 }), /leaks/],
-    ['inclined axes', wallOnly({ kMajor: 4, kMinor: 1, angle: 20 }), /inclined/],
+    ['inclined axes of ratio 40', wallOnly({ kMajor: 40, kMinor: 1, angle: 20 }), /differ too much/],
     ['a box open at its ends', buildBox({ length: 10, thickness: 2, head: 1 }), /not level/],
     [
-      'two permeabilities',
+      'ground of two very different permeabilities',
       {
         ...wallOnly(),
-        materials: [soil!, { ...soil!, id: 'clay', name: 'Clay', kMajor: 0.1, kMinor: 0.1 }],
+        materials: [soil!, { ...soil!, id: 'clay', name: 'Clay', kMajor: 0.01, kMinor: 0.01 }],
         zones: [...wallOnly().zones, { id: 'lens', material: 'clay', outline: [[1, -0.2], [1, -0.4], [2, -0.4], [2, -0.2]] }],
       },
-      /more than one permeability/,
+      /differ too much/,
     ],
     ['a flat floor with near ends', buildWeir({ thickness: 10, floor: [-5, 5], extent: 15 }), /its end is felt/],
   ]; // prettier-ignore
+  it('a lens of a tenth: the discharge lies between the two uniform ones (Rayleigh’s monotonicity)', () => {
+    const section: SectionInput = {
+      ...wallOnly(),
+      materials: [soil!, { ...soil!, id: 'silt', name: 'Silt', kMajor: 0.1, kMinor: 0.1 }],
+      zones: [
+        ...wallOnly().zones,
+        {
+          id: 'lens',
+          material: 'silt',
+          outline: [
+            [-1, -0.6],
+            [-1, -0.9],
+            [2, -0.9],
+            [2, -0.6],
+          ],
+        },
+      ],
+    };
+    const check = findCheck(solveSection(section), 'fragments');
+    expect(check.verdict).toBe('meets');
+    expect(lineOf(check, 'q_min')).toBeCloseTo(0.05, 9);
+    expect(lineOf(check, 'q_max')).toBeCloseTo(0.5, 9);
+    expect(lineOf(check, 'q_n')).toBeGreaterThan(0.05);
+    expect(lineOf(check, 'q_n')).toBeLessThan(0.5);
+    expect(check.value).toBeCloseTo(lineOf(check, 'q_n') / 0.5, 9);
+  });
+
+  it('inclined axes of ratio 4: the same, between isotropic ground of either permeability', () => {
+    const check = findCheck(solveSection(wallOnly({ kMajor: 4, kMinor: 1, angle: 20 }), 'live'), 'fragments');
+    expect(check.verdict).toBe('meets');
+    expect(lineOf(check, 'q_min')).toBeCloseTo(0.5, 9);
+    expect(lineOf(check, 'q_max')).toBeCloseTo(2, 9);
+  });
+
   it.each(uncovered)('%s is not covered, with the reason', (_, section, reason) => {
     const check = findCheck(solveSection(section, 'live'), 'fragments');
     expect(check).toMatchObject({ value: null, verdict: 'not-applicable' });
