@@ -12,7 +12,7 @@ import type { SteadySystem } from './steady';
  * @param mesh - The mesh.
  * @param conditions - One per edge and drain.
  * @param system - With the element matrices of the solve.
- * @param heads - Nodal heads, m.
+ * @param heads - Nodal heads over any level, m.
  * @param reactions - Nodal flows, positive into the ground.
  * @returns Flow per edge, then per drain.
  */
@@ -57,7 +57,11 @@ interface SharedNodes {
   readonly flows: Float64Array;
 }
 
-function divideShared(system: SteadySystem, heads: Float64Array, { lines, shared, reactions, flows }: SharedNodes): void {
+function divideShared(
+  system: SteadySystem,
+  heads: Float64Array,
+  { lines, shared, reactions, flows }: SharedNodes,
+): void {
   const { stride, count, nodes } = system.elements;
   const matrices = system.elementMatrices;
   const touches = lines.map((line) => new Set(line.elements));
@@ -69,7 +73,9 @@ function divideShared(system: SteadySystem, heads: Float64Array, { lines, shared
       if (!candidates) continue;
       let flow = 0;
       const row = (element * stride + a) * stride;
-      for (let b = 0; b < stride; b++) flow += matrices[row + b] * heads[nodes[element * stride + b]];
+      const first = heads[nodes[element * stride]];
+      for (let b = 1; b < stride; b++)
+        flow += matrices[row + b] * (heads[nodes[element * stride + b]] - first);
       const own = candidates.filter((line) => touches[line].has(element));
       for (const line of own) flows[line] += flow / own.length;
       if (own.length > 0) rest.set(node, rest.get(node)! - flow);

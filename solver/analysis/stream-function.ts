@@ -1,7 +1,12 @@
 // The dual problem, ∇·((K / det K) ∇ψ) = 0: any stream function bounds the dissipation from below, as any head bounds it from above.
 // Prager & Synge (1947), Quart. Appl. Math. 5; Pólya & Szegő (1951), Isoperimetric Inequalities in Mathematical Physics, ch. 2–3 (from memory).
-import { assemble, type CellSet, multiplyCells, scatterCells } from '../assembly/cells';
-import { conductivityTensor, dualTensor, integrateStiffness, type Weight } from '../assembly/element-stiffness';
+import { assemble, type CellSet, scatterCells, sumEnergy } from '../assembly/cells';
+import {
+  conductivityTensor,
+  dualTensor,
+  integrateStiffness,
+  type Weight,
+} from '../assembly/element-stiffness';
 import { integrateLeakDual, sideNodes } from '../assembly/line-integrals';
 import type { LineSides, Mesh } from '../mesh/mesh';
 import type { SituationConditions } from '../problem';
@@ -10,7 +15,7 @@ import { factorize } from '../sparse/factorize';
 import { order } from '../sparse/order';
 import { solve } from '../sparse/solve';
 import { connectNodes, groupOf, type Groups, joinGroups, makeGroups } from './reach';
-import type { Medium, SteadyModel, SteadySolution } from './steady';
+import { lowestHead, type Medium, type SteadyModel, type SteadySolution } from './steady';
 
 /** Stream function and what it says of the discharge. */
 export interface StreamSolution {
@@ -59,7 +64,8 @@ export function solveStreamFunction(
   const outcome = factorize(analyze(pattern, order(pattern)), values);
   if (outcome.status !== 'factorized') return none;
   const rhs = new Float64Array(dofCount);
-  for (let node = 0; node < mesh.nodeCount; node++) if (nodeDofs[node] >= 0) rhs[nodeDofs[node]] += loads[node];
+  for (let node = 0; node < mesh.nodeCount; node++)
+    if (nodeDofs[node] >= 0) rhs[nodeDofs[node]] += loads[node];
   solve(outcome.factor, rhs, rhs);
   const psi = new Float64Array(mesh.nodeCount);
   for (let node = 0; node < mesh.nodeCount; node++) psi[node] = nodeDofs[node] >= 0 ? rhs[nodeDofs[node]] : 0;
@@ -75,10 +81,7 @@ function dot(a: Float64Array, b: Float64Array): number {
 }
 
 function energyOf(dual: DualCells, psi: Float64Array): number {
-  const product = new Float64Array(psi.length);
-  multiplyCells(dual.elements, dual.elementMatrices, psi, product);
-  multiplyCells(dual.leaks, dual.leakMatrices, psi, product);
-  return dot(product, psi);
+  return sumEnergy(dual.elements, dual.elementMatrices, psi) + sumEnergy(dual.leaks, dual.leakMatrices, psi);
 }
 
 /** Flux edges make ψ vary along them and drains inside make it many-valued: neither is treated here. */
@@ -147,13 +150,15 @@ function readBoundary(
   return { ties, loads };
 }
 
-/** Head of each element side that lies on a head edge, by 3 · element + side. */
+/** Head over the lowest one of each element side that lies on a head edge, by 3 · element + side; a level common to all does no work. */
 function headsBySide(mesh: Mesh, conditions: SituationConditions): Map<number, number> {
   const heads = new Map<number, number>();
+  const lowest = lowestHead(conditions);
   mesh.edges.forEach((line, edge) => {
     const condition = conditions.edges[edge];
     if (condition.type !== 'head') return;
-    for (let i = 0; i < line.elements.length; i++) heads.set(3 * line.elements[i] + line.sides[i], condition.head);
+    for (let i = 0; i < line.elements.length; i++)
+      heads.set(3 * line.elements[i] + line.sides[i], condition.head - lowest);
   });
   return heads;
 }
@@ -172,7 +177,11 @@ function tieFaces(mesh: Mesh, left: LineSides, right: LineSides, ties: Groups, r
 }
 
 /** One degree of freedom per group of tied nodes; in each piece of ground the first is zero, since only differences of ψ mean anything. */
-function numberDofs(mesh: Mesh, solution: SteadySolution, ties: Groups): { nodeDofs: Int32Array; dofCount: number } {
+function numberDofs(
+  mesh: Mesh,
+  solution: SteadySolution,
+  ties: Groups,
+): { nodeDofs: Int32Array; dofCount: number } {
   const pieces = connectNodes(mesh.nodeCount, [solution.system.elements, solution.system.leaks]);
   const dofOf = new Map<number, number>();
   const grounded = new Set<number>();
@@ -180,7 +189,9 @@ function numberDofs(mesh: Mesh, solution: SteadySolution, ties: Groups): { nodeD
   const tieSize = new Int32Array(mesh.nodeCount);
   for (let node = 0; node < mesh.nodeCount; node++) tieSize[groupOf(ties, node)]++;
   // the zero goes to a tied boundary piece: that spares its long row
-  const bySize = [...tieSize.keys()].filter((tie) => tieSize[tie] > 1).sort((a, b) => tieSize[b] - tieSize[a] || a - b);
+  const bySize = [...tieSize.keys()]
+    .filter((tie) => tieSize[tie] > 1)
+    .sort((a, b) => tieSize[b] - tieSize[a] || a - b);
   for (const tie of bySize) {
     const piece = groupOf(pieces, tie);
     if (grounded.has(piece)) continue;

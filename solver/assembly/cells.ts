@@ -25,7 +25,11 @@ export interface ScatteredPattern {
  * @param dofCount - Number of degrees of freedom.
  * @returns Pattern with sorted rows, diagonal present, and scatter maps.
  */
-export function scatterCells(sets: readonly CellSet[], nodeDofs: Int32Array, dofCount: number): ScatteredPattern {
+export function scatterCells(
+  sets: readonly CellSet[],
+  nodeDofs: Int32Array,
+  dofCount: number,
+): ScatteredPattern {
   const start = new Int32Array(dofCount + 1);
   for (const { nodes } of sets) {
     for (let k = 0; k < nodes.length; k++) if (nodeDofs[nodes[k]] >= 0) start[nodeDofs[nodes[k]] + 1]++;
@@ -37,7 +41,8 @@ export function scatterCells(sets: readonly CellSet[], nodeDofs: Int32Array, dof
   let offset = 0;
   for (const { nodes } of sets) {
     offsets.push(offset);
-    for (let k = 0; k < nodes.length; k++) if (nodeDofs[nodes[k]] >= 0) uses[fill[nodeDofs[nodes[k]]]++] = offset + k;
+    for (let k = 0; k < nodes.length; k++)
+      if (nodeDofs[nodes[k]] >= 0) uses[fill[nodeDofs[nodes[k]]]++] = offset + k;
     offset += nodes.length;
   }
   return fillColumns({ sets, offsets, nodeDofs, dofCount, start, uses });
@@ -126,20 +131,55 @@ export function assemble(scatter: Int32Array, matrices: Float64Array, values: Fl
 /**
  * Adds the product of the cell matrices with a nodal vector.
  *
+ * Works on differences from each cell's first node: what is the same at all nodes of a cell gives nothing, so its size costs no digits.
+ *
  * @param cells - The cells.
- * @param matrices - Their matrices row by row.
+ * @param matrices - Their matrices row by row; the entries of a row add up to zero.
  * @param nodal - One value a node.
  * @param out - One value a node, added to: Σ K_e x_e.
  */
-export function multiplyCells(cells: CellSet, matrices: Float64Array, nodal: Float64Array, out: Float64Array): void {
+export function multiplyCells(
+  cells: CellSet,
+  matrices: Float64Array,
+  nodal: Float64Array,
+  out: Float64Array,
+): void {
   const { stride, count, nodes } = cells;
   for (let cell = 0; cell < count; cell++) {
     const base = cell * stride;
+    const first = nodal[nodes[base]];
     for (let a = 0; a < stride; a++) {
       let sum = 0;
       const row = (base + a) * stride;
-      for (let b = 0; b < stride; b++) sum += matrices[row + b] * nodal[nodes[base + b]];
+      for (let b = 1; b < stride; b++) sum += matrices[row + b] * (nodal[nodes[base + b]] - first);
       out[nodes[base + a]] += sum;
     }
   }
+}
+
+/**
+ * Sums the energy of a nodal vector, Σ xᵀ K_e x, cell by cell.
+ *
+ * Every term is positive and formed from differences within the cell, so the sum is good to rounding whatever the level of `nodal` and the
+ * contrast between cells.
+ *
+ * @param cells - The cells.
+ * @param matrices - Their positive semidefinite matrices row by row; the entries of a row add up to zero.
+ * @param nodal - One value a node.
+ * @returns The energy.
+ */
+export function sumEnergy(cells: CellSet, matrices: Float64Array, nodal: Float64Array): number {
+  const { stride, count, nodes } = cells;
+  let energy = 0;
+  for (let cell = 0; cell < count; cell++) {
+    const base = cell * stride;
+    const first = nodal[nodes[base]];
+    for (let a = 1; a < stride; a++) {
+      let sum = 0;
+      const row = (base + a) * stride;
+      for (let b = 1; b < stride; b++) sum += matrices[row + b] * (nodal[nodes[base + b]] - first);
+      energy += sum * (nodal[nodes[base + a]] - first);
+    }
+  }
+  return energy;
 }

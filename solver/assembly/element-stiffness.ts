@@ -88,14 +88,25 @@ const reference = new Map<ElementType, ReferenceMatrices>([
  * @throws {SolverError} `invalid-mesh` where an element's area is not positive.
  * @source Zienkiewicz & Taylor (2000), The Finite Element Method, vol. 1, ch. 8–9; Hughes (2000), ch. 3 (from memory).
  */
-export function integrateStiffness(mesh: Mesh, tensors: readonly Tensor[], weight: Weight, out: Float64Array): void {
+export function integrateStiffness(
+  mesh: Mesh,
+  tensors: readonly Tensor[],
+  weight: Weight,
+  out: Float64Array,
+): void {
   const type = elementTypeOf(mesh);
   const size = type.nodeCount * type.nodeCount;
   const matrices = reference.get(type)!;
   for (let element = 0; element < mesh.elementCount; element++) {
     const tensor = tensors[mesh.elementMaterials[element]];
     if (weight === 'reciprocal-circle' || !isStraight(mesh, element)) {
-      integrateByQuadrature(mesh, element, tensor, weight, out.subarray(element * size, (element + 1) * size));
+      integrateByQuadrature(
+        mesh,
+        element,
+        tensor,
+        weight,
+        out.subarray(element * size, (element + 1) * size),
+      );
     } else {
       integrateStraight(mesh, element, tensor, matrices, weight === 'circle', out);
     }
@@ -109,7 +120,8 @@ function isStraight(mesh: Mesh, element: number): boolean {
     const a = 2 * elements[6 * element + side];
     const b = 2 * elements[6 * element + ((side + 1) % 3)];
     const m = 2 * elements[6 * element + 3 + side];
-    const length = Math.abs(coordinates[b] - coordinates[a]) + Math.abs(coordinates[b + 1] - coordinates[a + 1]);
+    const length =
+      Math.abs(coordinates[b] - coordinates[a]) + Math.abs(coordinates[b + 1] - coordinates[a + 1]);
     const off =
       Math.abs(coordinates[m] - (coordinates[a] + coordinates[b]) / 2) +
       Math.abs(coordinates[m + 1] - (coordinates[a + 1] + coordinates[b + 1]) / 2);
@@ -139,7 +151,10 @@ function integrateStraight(
   const yEta = coordinates[node2 + 1] - y0;
   const determinant = xXi * yEta - xEta * yXi;
   if (!(determinant > 0)) {
-    throw new SolverError('invalid-mesh', `Element ${element} has no positive area.`, { element, area: determinant / 2 });
+    throw new SolverError('invalid-mesh', `Element ${element} has no positive area.`, {
+      element,
+      area: determinant / 2,
+    });
   }
   const [kxx, kxy, kyy] = tensor;
   // D = det J · J⁻¹ K J⁻ᵀ
@@ -174,7 +189,13 @@ const tangent = new Float64Array(5);
  * @throws {SolverError} `invalid-mesh` where the tangent's determinant is not positive at a point of the rule.
  * @source Zienkiewicz & Taylor (2000), The Finite Element Method, vol. 1, ch. 9 (from memory).
  */
-export function integrateByQuadrature(mesh: Mesh, element: number, tensor: Tensor, weight: Weight, out: Float64Array): void {
+export function integrateByQuadrature(
+  mesh: Mesh,
+  element: number,
+  tensor: Tensor,
+  weight: Weight,
+  out: Float64Array,
+): void {
   const type = elementTypeOf(mesh);
   const n = type.nodeCount;
   const gradients = new Float64Array(2 * n);
@@ -185,7 +206,10 @@ export function integrateByQuadrature(mesh: Mesh, element: number, tensor: Tenso
     type.shapeGradients(xi, eta, gradients);
     jacobian(mesh, element, gradients, tangent);
     if (!(tangent[4] > 0)) {
-      throw new SolverError('invalid-mesh', `Element ${element} is folded.`, { element, area: tangent[4] / 2 });
+      throw new SolverError('invalid-mesh', `Element ${element} is folded.`, {
+        element,
+        area: tangent[4] / 2,
+      });
     }
     physicalGradients(gradients, tangent, gradients);
     let factor = rule6.weights[q] * tangent[4];

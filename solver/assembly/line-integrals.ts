@@ -63,7 +63,11 @@ function sideShape(mesh: Mesh, nodes: Int32Array): SideShape {
   const { coordinates } = mesh;
   const x0 = coordinates[2 * nodes[0]];
   const x1 = coordinates[2 * nodes[1]];
-  return { x0, x1, length: Math.hypot(x1 - x0, coordinates[2 * nodes[1] + 1] - coordinates[2 * nodes[0] + 1]) };
+  return {
+    x0,
+    x1,
+    length: Math.hypot(x1 - x0, coordinates[2 * nodes[1] + 1] - coordinates[2 * nodes[0] + 1]),
+  };
 }
 
 /**
@@ -76,7 +80,13 @@ function sideShape(mesh: Mesh, nodes: Int32Array): SideShape {
  * @param out - Nodal loads, m³/s per metre run (or m³/s), added to.
  * @returns Total inflow along the line.
  */
-export function addFluxLoad(mesh: Mesh, line: LineSides, rate: number, weight: Weight, out: Float64Array): number {
+export function addFluxLoad(
+  mesh: Mesh,
+  line: LineSides,
+  rate: number,
+  weight: Weight,
+  out: Float64Array,
+): number {
   const count = mesh.order + 1;
   const nodes = new Int32Array(count);
   const N = new Float64Array(count);
@@ -87,7 +97,8 @@ export function addFluxLoad(mesh: Mesh, line: LineSides, rate: number, weight: W
     for (let q = 0; q < rule.weights.length; q++) {
       const xi = rule.points[q];
       lineShape(mesh.order, xi, N);
-      const factor = rate * rule.weights[q] * (length / 2) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
+      const factor =
+        rate * rule.weights[q] * (length / 2) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
       total += factor;
       for (let a = 0; a < count; a++) out[nodes[a]] += factor * N[a];
     }
@@ -104,7 +115,13 @@ export function addFluxLoad(mesh: Mesh, line: LineSides, rate: number, weight: W
  * @param weight - Plane or full circle.
  * @param out - Receives the matrix row by row, (2 · (order + 1))² entries; overwritten.
  */
-export function integrateLeak(mesh: Mesh, nodes: Int32Array, conductance: number, weight: Weight, out: Float64Array): void {
+export function integrateLeak(
+  mesh: Mesh,
+  nodes: Int32Array,
+  conductance: number,
+  weight: Weight,
+  out: Float64Array,
+): void {
   const half = mesh.order + 1;
   const N = new Float64Array(half);
   const { x0, x1, length } = sideShape(mesh, nodes);
@@ -112,10 +129,12 @@ export function integrateLeak(mesh: Mesh, nodes: Int32Array, conductance: number
   for (let q = 0; q < rule.weights.length; q++) {
     const xi = rule.points[q];
     lineShape(mesh.order, xi, N);
-    const factor = conductance * rule.weights[q] * (length / 2) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
+    const factor =
+      conductance * rule.weights[q] * (length / 2) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
     for (let a = 0; a < 2 * half; a++) {
       const left = (a < half ? 1 : -1) * N[a % half];
-      for (let b = 0; b < 2 * half; b++) out[a * 2 * half + b] += factor * left * (b < half ? 1 : -1) * N[b % half];
+      for (let b = 0; b < 2 * half; b++)
+        out[a * 2 * half + b] += factor * left * (b < half ? 1 : -1) * N[b % half];
     }
   }
 }
@@ -143,7 +162,9 @@ export function integrateLeakDual(
   for (let q = 0; q < rule.weights.length; q++) {
     const xi = rule.points[q];
     lineGradient(mesh.order, xi, dN);
-    const factor = ((rule.weights[q] * 2) / (length * conductance)) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
-    for (let a = 0; a < count; a++) for (let b = 0; b < count; b++) out[a * count + b] += factor * dN[a] * dN[b];
+    const factor =
+      ((rule.weights[q] * 2) / (length * conductance)) * weightAt(weight, x0 + ((xi + 1) / 2) * (x1 - x0));
+    for (let a = 0; a < count; a++)
+      for (let b = 0; b < count; b++) out[a * count + b] += factor * dN[a] * dN[b];
   }
 }
