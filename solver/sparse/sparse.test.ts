@@ -3,7 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { analyze } from './analyze';
 import { type CscMatrix, multiply } from './csc-matrix';
-import { factorize } from './factorize';
+import { factorize, reserveFactor } from './factorize';
 import { order } from './order';
 import { solve } from './solve';
 
@@ -65,17 +65,23 @@ function solveAll(matrix: CscMatrix, rhs: Float64Array): Float64Array {
   return x;
 }
 
-const randomMatrix = fc.integer({ min: 1, max: 60 }).chain((size) =>
-  fc
-    .array(fc.tuple(fc.nat(size - 1), fc.nat(size - 1), fc.double({ min: 0.01, max: 10, noNaN: true })), { maxLength: 4 * size })
-    .map((pairs) => fromPairs(size, pairs)),
-);
+const randomMatrix = fc
+  .integer({ min: 1, max: 60 })
+  .chain((size) =>
+    fc
+      .array(fc.tuple(fc.nat(size - 1), fc.nat(size - 1), fc.double({ min: 0.01, max: 10, noNaN: true })), {
+        maxLength: 4 * size,
+      })
+      .map((pairs) => fromPairs(size, pairs)),
+  );
 
 describe('sparse Cholesky', () => {
   it('orders every row exactly once', () => {
     fc.assert(
       fc.property(randomMatrix, (matrix) => {
-        expect([...order(matrix)].sort((a, b) => a - b)).toEqual(Array.from({ length: matrix.size }, (_, i) => i));
+        expect([...order(matrix)].sort((a, b) => a - b)).toEqual(
+          Array.from({ length: matrix.size }, (_, i) => i),
+        );
       }),
     );
   });
@@ -84,7 +90,9 @@ describe('sparse Cholesky', () => {
     fc.assert(
       fc.property(randomMatrix, (matrix) => {
         const rhs = Float64Array.from({ length: matrix.size }, (_, i) => Math.sin(i + 1));
-        const expected = new CholeskyDecomposition(toDense(matrix)).solve(Matrix.columnVector([...rhs])).to1DArray();
+        const expected = new CholeskyDecomposition(toDense(matrix))
+          .solve(Matrix.columnVector([...rhs]))
+          .to1DArray();
         const actual = solveAll(matrix, rhs);
         expected.forEach((value, i) => expect(actual[i]).toBeCloseTo(value, 9));
       }),
@@ -119,6 +127,68 @@ describe('sparse Cholesky', () => {
       [1, 2, 1],
     ]);
     matrix.values[0] = -1;
-    expect(factorize(analyze(matrix, order(matrix)), matrix.values)).toEqual({ status: 'not-positive-definite', row: 0 });
+    expect(factorize(analyze(matrix, order(matrix)), matrix.values)).toEqual({
+      status: 'not-positive-definite',
+      row: 0,
+    });
+  });
+
+  it('makes L with L Lᵀ = P A Pᵀ', () => {
+    fc.assert(
+      fc.property(randomMatrix, (matrix) => {
+        const outcome = factorize(analyze(matrix, order(matrix)), matrix.values);
+        if (outcome.status !== 'factorized') throw new RangeError(`stopped at ${outcome.row}`);
+        const { panels, symbolic } = outcome.factor;
+        const { permutation, supernodeStart, belowStart, below, panelStart } = symbolic;
+        const lower = Matrix.zeros(matrix.size, matrix.size);
+        for (let s = 0; s < symbolic.supernodeCount; s++) {
+          const own = supernodeStart[s + 1]! - supernodeStart[s]!;
+          const height = own + belowStart[s + 1]! - belowStart[s]!;
+          for (let j = 0; j < own; j++) {
+            for (let i = j; i < height; i++) {
+              const row = i < own ? supernodeStart[s]! + i : below[belowStart[s]! + i - own]!;
+              lower.set(row, supernodeStart[s]! + j, panels[panelStart[s]! + j * height + i]!);
+            }
+          }
+        }
+        const product = lower.mmul(lower.transpose());
+        const dense = toDense(matrix);
+        for (let a = 0; a < matrix.size; a++) {
+          for (let b = 0; b < matrix.size; b++) {
+            expect(product.get(a, b)).toBeCloseTo(dense.get(permutation[a]!, permutation[b]!), 10);
+          }
+        }
+      }),
+    );
+  });
+
+  it('gives the same bits again, in reserved memory too', () => {
+    const matrix = grid(40, 30);
+    const rhs = Float64Array.from({ length: matrix.size }, (_, i) => Math.sin(i));
+    const symbolic = analyze(matrix, order(matrix));
+    const memory = reserveFactor(symbolic);
+    const run = (values: Float64Array): Float64Array => {
+      const outcome = factorize(symbolic, values, memory);
+      const x = new Float64Array(matrix.size);
+      if (outcome.status === 'factorized') solve(outcome.factor, rhs, x);
+      return x;
+    };
+    const first = run(matrix.values);
+    run(matrix.values.map((v) => 3 * v));
+    expect(run(matrix.values)).toEqual(first);
+    expect(solveAll(matrix, rhs)).toEqual(first);
+  });
+
+  it('takes an empty matrix, and refuses one with not-a-number on its diagonal', () => {
+    const empty = fromPairs(0, []);
+    expect(solveAll(empty, new Float64Array(0))).toHaveLength(0);
+    const matrix = fromPairs(4, [
+      [0, 1, 1],
+      [2, 3, 1],
+    ]);
+    matrix.values[matrix.columnPointers[2]!] = NaN;
+    expect(factorize(analyze(matrix, order(matrix)), matrix.values)).toMatchObject({
+      status: 'not-positive-definite',
+    });
   });
 });
