@@ -75,7 +75,9 @@ function buildField(
 ): FarField {
   const clip = ({ x, y, size }: SizeSource): SizeSource => ({ x, y, size: Math.max(size, floor) });
   const scaled = [...corners, ...thin].map(({ x, y, size }) => clip({ x, y, size: size * factor }));
-  const asked = [...forced, ...(options.refineAt ?? [])].map(clip);
+  const asked = [...forced, ...(options.refineAt ?? [])]
+    .filter(({ x, y }) => Number.isFinite(x) && Number.isFinite(y))
+    .map(clip);
   return new FarField([...scaled, ...asked], corners, slope * Math.min(factor, 1.5), {
     near: nearRatio * thickness * factor,
     far: farRatio * thickness * factor,

@@ -219,6 +219,19 @@ describe('gaps and slivers', () => {
     expect(outcome.mesh.barriers[0].left.elements.length).toBeGreaterThan(1);
   });
 
+  it('gives the smallest barrier at least two sides, or its nodes would not part', () => {
+    const path: Path = [
+      [200, 30],
+      [200, 29.9],
+    ];
+    const outcome = buildMesh(
+      section({ regions: [region(box(0, 0, 1000, 50))], barriers: [{ path, conductance: 0 }] }),
+      { order: 1, sizeFactor: 8, maxElements: 20_000 },
+    );
+    if (outcome.status === 'refused') expect.fail('refused');
+    expect(outcome.mesh.barriers[0].left.elements.length).toBeGreaterThan(1);
+  });
+
   it('meshes far from the origin', () => {
     const outcome = build({ regions: [region(box(1e6, 1e6, 1e6 + 10, 1e6 + 3))] });
     if (outcome.status === 'refused') expect.fail('refused');

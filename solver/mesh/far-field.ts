@@ -41,8 +41,9 @@ export class FarField implements Sizing {
     sizes: FarSizes,
   ) {
     this.#fine = new SizeField(sources, slope, sizes.far);
+    const spread = spreadOut(disturbances, sizes.reach / 4);
     this.#distance = new SizeField(
-      disturbances.map(({ x, y }) => ({ x, y, size: 0 })),
+      spread.map(({ x, y }) => ({ x, y, size: 0 })),
       1,
       disturbances.length > 0 ? Infinity : 0,
     );
@@ -63,4 +64,15 @@ export class FarField implements Sizing {
     const beyond = this.#distance.sizeAt(px, py) - reach;
     return beyond <= 0 ? near : Math.min(size, near + farSlope * beyond);
   }
+}
+
+// One of the places in each square of a grid: enough for a distance, and few however rough the outline.
+function spreadOut(places: readonly SizeSource[], cell: number): SizeSource[] {
+  const taken = new Set<string>();
+  return places.filter(({ x, y }) => {
+    const key = `${Math.floor(x / cell)},${Math.floor(y / cell)}`;
+    if (taken.has(key)) return false;
+    taken.add(key);
+    return true;
+  });
 }

@@ -22,13 +22,19 @@ export interface Mesh {
   readonly neighbours: Int32Array;
   /** Element sides along each input line, in order along the path. */
   readonly edges: readonly LineSides[];
-  /** Both faces of each inner barrier piece, in order along the path. */
+  /**
+   * Both faces of each inner barrier piece, in order along the path. Pieces on the outline have no faces; a piece that
+   * several barriers share is listed under the least conductive of them alone.
+   */
   readonly barriers: readonly BarrierSides[];
-  /** Sides along each drain; one side is enough, its nodes are shared with the other. */
+  /**
+   * Sides along each drain; one side is enough, its nodes are shared with the other. Where a barrier runs along the
+   * drain the nodes differ, and both sides are listed, left before right.
+   */
   readonly drains: readonly LineSides[];
-  /** Sides along each base, ground side. */
+  /** Sides along each base, ground side; where a base runs inside the ground both sides, left before right. */
   readonly bases: readonly LineSides[];
-  /** Sides on the outline of the ground, all of them. */
+  /** Sides on the outline of the ground, all of them, ring after ring with the ground to the left. */
   readonly outline: LineSides;
   /** Smallest angle of any element, degrees. */
   readonly minAngle: number;

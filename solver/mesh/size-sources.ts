@@ -13,6 +13,8 @@ const tipRatio = 1 / 1000;
 /** The same where gradients are read though the field is regular: a wall's foot at the surface. */
 const footRatio = 1 / 20;
 const leastRatio = 1 / 4000;
+/** Features this many times smaller than the largest elements are details. */
+const detailShare = 16;
 const footExponent = 0.95;
 /** Elements across a thin layer. */
 const acrossCount = 1.25;
@@ -50,7 +52,10 @@ function listCornerSources(ground: Ground, ceiling: number): SizeSource[] {
     const reach = Math.min(measureRoom(ground, all, v), 3 * ceiling);
     // Energy missed within r of a corner goes as r^(2 exponent): equal shares give each corner its size.
     const ratio = exponent === footExponent ? footRatio : Math.pow(tipRatio, 0.5 / exponent);
-    sources.push({ x: ground.x[v], y: ground.y[v], size: reach * Math.max(ratio, leastRatio) });
+    // A corner of a detail moves the whole by the square of the detail's share of it.
+    const detail = Math.pow(Math.max(1, ceiling / (detailShare * reach)), 1 / exponent);
+    const share = Math.min(Math.max(ratio, leastRatio) * detail, 0.5);
+    sources.push({ x: ground.x[v], y: ground.y[v], size: reach * share });
   });
   return sources;
 }
@@ -129,17 +134,25 @@ function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
   const { x, y, starts, ends, left, right } = ground;
   const sources: SizeSource[] = [];
   const finder = new AcrossFinder(ground, acrossCount * ceiling);
+  const last: Record<number, WidthSample> = {};
   for (let s = 0; s < starts.length; s++) {
     const [a, b] = [starts[s], ends[s]];
-    const length = Math.hypot(x[b] - x[a], y[b] - y[a]);
+    const [dx, dy] = [x[b] - x[a], y[b] - y[a]];
+    const length = Math.hypot(dx, dy);
     for (const hand of [left[s] >= 0 ? 1 : 0, right[s] >= 0 ? -1 : 0]) {
       if (hand === 0) continue;
       for (let at = 0; at < length;) {
-        const px = x[a] + ((x[b] - x[a]) * at) / length;
-        const py = y[a] + ((y[b] - y[a]) * at) / length;
-        const width = finder.widthAt(s, hand, px, py);
-        const size = width / acrossCount;
-        if (size < ceiling) sources.push({ x: px, y: py, size });
+        const sample = {
+          x: x[a] + (dx * at) / length,
+          y: y[a] + (dy * at) / length,
+          dx: dx / length,
+          dy: dy / length,
+        };
+        if (at === 0 && last[hand] && speaksFor(last[hand], sample)) break;
+        const width = finder.widthAt(s, hand, sample.x, sample.y);
+        last[hand] = { ...sample, width };
+        if (width / acrossCount < ceiling)
+          sources.push({ x: sample.x, y: sample.y, size: width / acrossCount });
         at += Math.max(Math.min(width, length / 2), length / 2000);
       }
     }
@@ -147,19 +160,38 @@ function listThinSources(ground: Ground, ceiling: number): SizeSource[] {
   return sources;
 }
 
+/** A place on a segment, its direction, and the width of the ground across. */
+interface WidthSample {
+  readonly x: number;
+  readonly y: number;
+  readonly dx: number;
+  readonly dy: number;
+  readonly width: number;
+}
+
+// Whether a short segment lies so near the last sample, and so much along it, that its width is the same.
+function speaksFor(last: WidthSample, next: Omit<WidthSample, 'width'>): boolean {
+  const distance = Math.hypot(next.x - last.x, next.y - last.y);
+  return distance < 0.25 * last.width && last.dx * next.dx + last.dy * next.dy > 0.8;
+}
+
 // Short segments and sharp corners bring small elements with them; said beforehand, sizes grow from there in steps.
 function listForcedSources(ground: Ground, ceiling: number): SizeSource[] {
   const { x, y, starts, ends } = ground;
-  const sources: SizeSource[] = [];
+  const sizes = new Float64Array(x.length).fill(Infinity);
   findSharpCorners(ground).forEach((sharp, v) => {
-    if (sharp) sources.push({ x: x[v], y: y[v], size: measureShell(ground, v) });
+    if (sharp) sizes[v] = measureShell(ground, v);
   });
   starts.forEach((a, s) => {
     const b = ends[s];
-    const size = Math.hypot(x[b] - x[a], y[b] - y[a]);
-    if (size >= ceiling) return;
-    sources.push({ x: (x[a] + x[b]) / 2, y: (y[a] + y[b]) / 2, size });
-    for (const v of [a, b]) sources.push({ x: x[v], y: y[v], size });
+    const length = Math.hypot(x[b] - x[a], y[b] - y[a]);
+    sizes[a] = Math.min(sizes[a], length);
+    sizes[b] = Math.min(sizes[b], length);
   });
-  return sources;
+  for (const { kind, segments, distances } of ground.lines) {
+    if (kind !== 'barrier' || segments.length !== 1 || segments[0] < 0) continue;
+    const half = distances[1] / 2.2; // one side alone, between two single tips, would part no nodes of order 1
+    for (const v of [starts[segments[0]], ends[segments[0]]]) sizes[v] = Math.min(sizes[v], half);
+  }
+  return Array.from(sizes, (size, v) => ({ x: x[v], y: y[v], size })).filter(({ size }) => size < ceiling);
 }
