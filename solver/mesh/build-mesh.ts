@@ -15,7 +15,7 @@ import type { SizeSources } from './size-sources';
 import { listSizeSources } from './size-sources';
 import { buildTopology } from './topology';
 
-export type { GeometryFinding, GeometryFindingCode, LineKind, MeshOptions, MeshOutcome } from './outcome';
+export type { MeshOptions, MeshOutcome } from './outcome';
 
 /** Growth of the element size per metre of distance at size factor 1; it shrinks with the sizes, so that halving quarters. */
 const slope = 0.4;
