@@ -1,0 +1,3 @@
+export * from './library';
+export * from './people';
+export * from './work';

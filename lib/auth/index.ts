@@ -1,0 +1,13 @@
+// Signing in. The rest of the product knows these names and no library behind them.
+export {
+  blankCookie,
+  closeAllSessions,
+  closeSession,
+  type CookieToSet,
+  openSession,
+  readSession,
+  sessionCookieName,
+  type SignInSession,
+} from './lucia';
+export { hashPassword, verifyNobody, verifyPassword } from './password';
+export { hashSecret, makeSecret } from './secrets';
