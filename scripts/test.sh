@@ -78,7 +78,7 @@ count_step build build_product
 vitest_suite integration
 
 say "starting the product for the browser"
-if (npm run --silent db:migrate && npm run --silent db:seed) && export NODE_ENV=production UNDERFALL_RELAXED_LIMITS=1 && start_product_services; then
+if (npm run --silent db:migrate && npm run --silent db:seed) && export NODE_ENV=production RATE_LIMIT_FACTOR=100 && start_product_services; then
   passed=$((passed + 1))
   count_suite browser "$root/test-results/e2e.json" env -u NODE_ENV node node_modules/@playwright/test/cli.js test
 else

@@ -8,6 +8,8 @@ const schema = z.object({
   COOKIE_SECURE: z.enum(['0', '1']).default('1'),
   /** Multiplies every rate limit; tests that sign in many people raise it. */
   RATE_LIMIT_FACTOR: z.coerce.number().positive().default(1),
+  /** The address mails come from. */
+  MAIL_FROM: z.email().default('post@underfall.example'),
   SOLVE_TIME_LIMIT_MS: z.coerce.number().int().positive().default(20_000),
 });
 

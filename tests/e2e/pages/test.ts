@@ -7,7 +7,7 @@ export const test = base.extend<{ quietBrowser: void; allowedLog: RegExp[] }>({
     async ({ context, allowedLog }, use) => {
       const findings: string[] = [];
       await context.addInitScript(() => {
-        addEventListener('securitypolicyviolation', (event) =>
+        document.addEventListener('securitypolicyviolation', (event) =>
           console.error(`policy: ${event.violatedDirective} ${event.blockedURI} ${event.sample}`),
         );
       });
