@@ -13,7 +13,8 @@ const unreachable = {
 };
 
 interface ActionFormOptions<Input extends FieldValues, Output, Value> {
-  schema: z.ZodType<Output, Input>;
+  // the core type: the API description extends ZodType, which would blur what is inferred of the input
+  schema: z.core.$ZodType<Output, Input>;
   defaultValues: NoInfer<DefaultValues<Input>>;
   /** Takes what was typed, not what the schema made of it: the server reads the same words with the same schema. */
   action: (input: NoInfer<Input>) => Promise<ActionResult<Value>>;

@@ -34,6 +34,11 @@ export async function readCriteriaInEffect(tx: Transaction, practiceId: string):
   return [...adopted, ...exampleCriteria.filter(({ quantity }) => !settled.has(quantity))];
 }
 
+/** The same for an actor, outside a transaction; a solve takes them without the right to read the library. */
+export function listCriteriaInEffect({ practiceId }: Actor): Promise<Criterion[]> {
+  return withPractice(practiceId, (tx) => readCriteriaInEffect(tx, practiceId));
+}
+
 export interface CriterionInput {
   /** Empty for a new one; an example's id adopts it. */
   readonly id: string;
