@@ -111,12 +111,12 @@ export function createScoreStore(detail: SectionDetail, units: 'si' | 'us', rest
       if (redo.length === 0) return;
       set(({ past }) => {
         const last = past.at(-1);
-        const merged =
-          group !== undefined && last?.group === group
-            ? { ...last, redo: [...last.redo, ...redo], undo: [...undo, ...last.undo] }
-            : { label, group: group ?? null, redo, undo };
-        const kept = merged === last || (group !== undefined && last?.group === group) ? past.slice(0, -1) : past;
-        return { document, past: [...kept, merged], future: [], keeping: { status: 'waiting' } };
+        if (group === undefined || last?.group !== group) {
+          const entry = { label, group: group ?? null, redo, undo };
+          return { document, past: [...past, entry], future: [], keeping: { status: 'waiting' } };
+        }
+        const merged = { ...last, redo: [...last.redo, ...redo], undo: [...undo, ...last.undo] };
+        return { document, past: [...past.slice(0, -1), merged], future: [], keeping: { status: 'waiting' } };
       });
     },
     undo() {
@@ -147,7 +147,11 @@ export function createScoreStore(detail: SectionDetail, units: 'si' | 'us', rest
     setRefusal: (refusal) => set({ refusal }),
     setKeeping: (keeping) => set({ keeping }),
     markKept: (version, at) =>
-      set(({ detail: before }) => ({ version, detail: { ...before, untouched: false }, keeping: { status: 'kept', at } })),
+      set(({ detail: before }) => ({
+        version,
+        detail: { ...before, untouched: false },
+        keeping: { status: 'kept', at },
+      })),
     adopt: (next) =>
       set(({ situationId }) => ({
         detail: next,
