@@ -4,13 +4,13 @@ import { env } from '@/lib/server/env';
 import { log } from '@/lib/server/log';
 import { startWorker } from '@/lib/server/worker/run-worker';
 
-env();
+const { SMTP_URL: smtpUrl } = env();
 const queueUrl = process.env.DATABASE_OWNER_URL;
 if (!queueUrl) {
   console.error('DATABASE_OWNER_URL is not set; npm start sets it, .env.example shows its form.');
   process.exit(2);
 }
-const worker = await startWorker({ queueUrl });
+const worker = await startWorker({ queueUrl, smtpUrl });
 log.info('worker up');
 let isStopping = false;
 for (const signal of ['SIGTERM', 'SIGINT'] as const) {

@@ -20,14 +20,15 @@ export interface RunningWorker {
 export interface WorkerOptions {
   /** The owner's connection: the queue's tables are not the application's. */
   readonly queueUrl: string;
+  readonly smtpUrl: string;
 }
 
 /** Starts taking jobs. */
-export async function startWorker({ queueUrl }: WorkerOptions): Promise<RunningWorker> {
+export async function startWorker({ queueUrl, smtpUrl }: WorkerOptions): Promise<RunningWorker> {
   const queue = new Pool({ connectionString: queueUrl, max: 4 });
   queue.on('error', () => {}); // an idle client's error would end the process; the next query reports it
   queue.on('connect', (client) => client.on('error', () => {}));
-  const transport = createTransport(env().SMTP_URL);
+  const transport = createTransport(smtpUrl);
   const tasks: TaskList = {
     'send-mail': async (payload, { job }) => {
       const sent = await deliverMail(mailJob.parse(payload), { transport, address: env().MAIL_FROM });
