@@ -22,7 +22,6 @@ function threads(): Piscina {
     name: 'analyzeInThread',
     minThreads: 1,
     maxThreads: threadCount,
-    maxQueue: longestQueue,
     idleTimeout: 60_000,
     resourceLimits: { maxOldGenerationSizeMb: threadMegabytes },
   });
@@ -49,6 +48,8 @@ export async function solveInPool(
   request: Omit<AnalysisRequest, 'ticket'>,
   { signal, milliseconds = env().SOLVE_TIME_LIMIT_MS }: SolveLimits = {},
 ): Promise<SolveOutcome> {
+  // counted here: the pool's own limit leaves out the tasks that wait behind busy threads
+  if (threads().queueSize >= longestQueue) throw new AppError('busy', undefined, { retryAfter: 5 });
   const clock = AbortSignal.timeout(milliseconds);
   const ends = signal ? AbortSignal.any([signal, clock]) : clock;
   try {
@@ -67,8 +68,6 @@ function nameFailure(error: unknown, milliseconds: number): unknown {
     const sentence = `The solve took longer than the limit of ${milliseconds / 1000} s and was stopped. Coarsen the section or solve fewer situations at once.`;
     return new AppError('timeout', undefined, { sentence }, { cause: error });
   }
-  if (/queue is at limit|No task queue available/i.test(error.message))
-    return new AppError('busy', undefined, { retryAfter: 5 }, { cause: error });
   if ((error as Error & { code?: string }).code === 'ERR_WORKER_OUT_OF_MEMORY') {
     const sentence =
       'The section needs more memory than a solve may take. Draw it with fewer, larger details.';

@@ -423,7 +423,7 @@ describe('solving', () => {
     const request = { document: sampleSection(), criteria: [], effort: 'live' } as const;
     const outcomes = await Promise.allSettled(Array.from({ length: 40 }, () => solveInPool(request)));
     const refused = outcomes.filter(({ status }) => status === 'rejected') as PromiseRejectedResult[];
-    expect(refused.length).toBeGreaterThan(0);
+    expect(refused.length).toBeGreaterThanOrEqual(20);
     for (const { reason } of refused)
       expect(reason).toMatchObject({ code: 'busy', details: { retryAfter: 5 } });
     expect(outcomes.filter(({ status }) => status === 'fulfilled').length).toBeGreaterThanOrEqual(16);
