@@ -15,12 +15,10 @@ const dischargeSchema = z
     unit: z.enum(['m3/s/m', 'm3/s']),
     balance: number.meta({ description: 'Net of all flows over the inflow.' }),
     byEdge: z.record(text, number).meta({ description: 'By edge and drain, positive into the ground.' }),
-    kind: z
-      .enum(['bound', 'estimate'])
-      .meta({
-        description:
-          'bound: lower and upper are a mathematical bracket; estimate: from the last change of mesh.',
-      }),
+    kind: z.enum(['bound', 'estimate']).meta({
+      description:
+        'bound: lower and upper are a mathematical bracket; estimate: from the last change of mesh.',
+    }),
   })
   .meta({ id: 'Discharge', description: 'For the drawn section and these permeabilities.' });
 
@@ -155,8 +153,9 @@ export const resultSchema = z
   .meta({ id: 'Result', title: 'Underfall result document', description: 'SI units throughout.' });
 
 type Schema = z.output<typeof resultSchema>;
-/** Fails to compile where the schema and the type part. */
-export const resultSchemaAgrees: [
+// fails to compile where the schema and the type part
+const agreement: [
   Schema extends ResultDocument ? true : never,
   ResultDocument extends Schema ? true : never,
 ] = [true, true];
+void agreement;
