@@ -13,15 +13,15 @@ export function useAnswer(): void {
     const worker = createAnalysisWorker();
     let timer: ReturnType<typeof setTimeout> | undefined;
     let isBusy = false;
-    let isOutdated = false;
+    let next: 'live' | 'full' | null = null;
 
     const ask = async (effort: 'live' | 'full'): Promise<void> => {
       if (isBusy) {
-        isOutdated = true;
+        next = effort;
         return;
       }
       isBusy = true;
-      isOutdated = false;
+      next = null;
       const { document, detail, situationId } = store.getState();
       const began = performance.now();
       const answer = await worker.analyze(document, {
@@ -47,7 +47,7 @@ export function useAnswer(): void {
         };
         store.getState().setRefusal({ document, problem, issues: [] });
       }
-      if (isOutdated) void ask('live');
+      if (next) void ask(next);
     };
     const settle = (): void => {
       clearTimeout(timer);

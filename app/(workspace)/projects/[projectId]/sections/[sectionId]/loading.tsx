@@ -1,0 +1,5 @@
+import { ScoreSkeleton } from '@/components/score/score-skeleton';
+
+export default function LoadingSection() {
+  return <ScoreSkeleton />;
+}
