@@ -10,6 +10,6 @@ test('from sign-up to the first answer', async ({ page }) => {
   await page.getByRole('link', { name: 'Open the first project' }).click();
   const projects = new ProjectPages(page);
   await projects.create({ number: '26-001', name: 'Lower Weir', client: 'Town of Aldern' });
-  await projects.beginSection(/wall/i);
+  await projects.beginSection(/wall in ground/i);
   await expect(page.getByRole('status', { name: 'Answer' })).toContainText(/\d/, { timeout: 20_000 });
 });

@@ -44,7 +44,7 @@ test('a client sees the project but no draft', async ({ page, browser }) => {
 
   const projects = new ProjectPages(page);
   const project = await projects.create({ number: '26-044', name: 'Mill Race', client: 'Meister Mill' });
-  const section = await projects.beginSection(/wall/i);
+  const section = await projects.beginSection(/wall in ground/i);
   await page.goto(project);
   await projects.appoint(client.name, 'client');
 

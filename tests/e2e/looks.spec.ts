@@ -61,7 +61,7 @@ test.describe('inside the workspace', () => {
       name: 'A long name, so that it has to break: barrage of the lower Aldern at Mill Bend',
       client: 'Aldern Water Board',
     });
-    const section = await projects.beginSection(/wall/i);
+    const section = await projects.beginSection(/wall in ground/i);
     for (const address of [
       ...closed,
       project,

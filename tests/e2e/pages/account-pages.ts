@@ -7,7 +7,7 @@ export class AccountPages {
 
   async signUp(person: Person, practice: string): Promise<void> {
     await this.page.goto('/sign-up');
-    await this.page.getByLabel('Practice').fill(practice);
+    await this.page.getByRole('textbox', { name: 'Practice' }).fill(practice);
     await this.page.getByLabel('Your name').fill(person.name);
     await this.page.getByLabel('E-mail').fill(person.email);
     await this.page.getByLabel('Password').fill(person.password);
