@@ -29,10 +29,15 @@ export function proxy(request: NextRequest): NextResponse {
   const headers = new Headers(request.headers);
   headers.set('x-nonce', nonce);
   headers.set('content-security-policy', policy);
+  // where to come back to after signing in
+  headers.set('x-pathname', request.nextUrl.pathname + request.nextUrl.search);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', policy);
   response.headers.set('x-content-type-options', 'nosniff');
+  // not no-referrer: a browser then sends its actions from a nameless origin, and Next.js refuses them
   response.headers.set('referrer-policy', 'same-origin');
+  if (process.env.UNDERFALL_URL?.startsWith('https:'))
+    response.headers.set('strict-transport-security', 'max-age=31536000; includeSubDomains');
   response.headers.set('cross-origin-opener-policy', 'same-origin');
   response.headers.set('cross-origin-resource-policy', 'same-origin');
   response.headers.set('permissions-policy', 'camera=(), geolocation=(), microphone=()');

@@ -11,7 +11,8 @@ export const metadata: Metadata = { title: 'Sign in' };
 const search = z.object({
   next: z
     .string()
-    .regex(/^\/(?![/\\])[^\\]*$/)
+    // no control characters either: a browser drops a tab, and "/<tab>/elsewhere" would become "//elsewhere"
+    .regex(/^\/(?![/\\])[^\\\p{Cc}]*$/u)
     .catch(paths.desk()),
 });
 
