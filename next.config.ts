@@ -9,6 +9,8 @@ const nextConfig: NextConfig = {
   // pinned: Next guesses a parent folder when it finds another lockfile above
   turbopack: { root: import.meta.dirname },
   outputFileTracingRoot: import.meta.dirname,
+  // a section document of the greatest size, as text inside an action's arguments
+  experimental: { serverActions: { bodySizeLimit: '3mb' } },
   // start their own threads from files on disk, so the bundler must leave them alone
   serverExternalPackages: ['piscina'],
 };

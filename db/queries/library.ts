@@ -105,6 +105,33 @@ export async function insertAuditEvent(tx: Transaction, event: NewAuditEvent) {
   await tx.insert(auditEvents).values(event);
 }
 
+/** True where the same person did the same to the same subject within the minutes past. */
+export async function hasRecentEvent(
+  tx: Transaction,
+  {
+    practiceId,
+    actorId,
+    action,
+    subject,
+    minutes,
+  }: Required<Omit<NewAuditEvent, 'actorName' | 'detail'>> & { minutes: number },
+): Promise<boolean> {
+  const [row] = await tx
+    .select({ id: auditEvents.id })
+    .from(auditEvents)
+    .where(
+      and(
+        eq(auditEvents.practiceId, practiceId),
+        eq(auditEvents.actorId, actorId ?? ''),
+        eq(auditEvents.action, action),
+        eq(auditEvents.subject, subject),
+        gt(auditEvents.at, sql`now() - make_interval(mins => ${minutes})`),
+      ),
+    )
+    .limit(1);
+  return row !== undefined;
+}
+
 export function selectAuditEvents(tx: Transaction, { practiceId, limit }: InPractice & { limit: number }) {
   return tx
     .select()

@@ -1,7 +1,7 @@
 import { and, asc, desc, eq, gt, isNull, lt, sql } from 'drizzle-orm';
 import type { PracticeRole } from '@/lib/domain/dto';
 import type { Database, Transaction } from '../client';
-import { invitations, memberships, passwordResets, practices, sessions, users } from '../schema';
+import { invitations, memberships, passwordResets, practices, rateLimits, sessions, users } from '../schema';
 
 type Runner = Database | Transaction;
 
@@ -88,6 +88,11 @@ export function selectMembers(tx: Transaction, { practiceId }: { practiceId: str
     .innerJoin(users, eq(users.id, memberships.userId))
     .where(eq(memberships.practiceId, practiceId))
     .orderBy(asc(users.name));
+}
+
+/** Holds a practice's members as they are until the transaction ends, so that two changes at once see each other. */
+export async function lockPractice(tx: Transaction, { practiceId }: { practiceId: string }) {
+  await tx.select({ id: practices.id }).from(practices).where(eq(practices.id, practiceId)).for('update');
 }
 
 export async function countAdministrators(
@@ -283,6 +288,13 @@ export async function deleteSession(db: Runner, { userId, publicId }: { userId: 
     .where(and(eq(sessions.userId, userId), eq(sessions.publicId, publicId)))
     .returning({ id: sessions.id });
   return row ?? null;
+}
+
+/** Forgets what nobody can use any more: sessions and resets that have run out, counts of tries long past. */
+export async function sweepExpired(db: Runner) {
+  await db.delete(sessions).where(lt(sessions.expiresAt, sql`now()`));
+  await db.delete(passwordResets).where(lt(passwordResets.expiresAt, sql`now() - interval '1 day'`));
+  await db.delete(rateLimits).where(lt(rateLimits.expire, sql`extract(epoch from now()) * 1000`));
 }
 
 export async function deleteSessionsInPractice(

@@ -1,6 +1,6 @@
 import 'server-only';
 import { type Transaction, withPractice } from '@/db/client';
-import { insertAuditEvent, selectAuditEvents } from '@/db/queries/library';
+import { hasRecentEvent, insertAuditEvent, selectAuditEvents } from '@/db/queries/library';
 import type { Actor, AuditEvent } from '@/lib/domain/dto';
 import { authorize } from './authorize';
 
@@ -18,6 +18,20 @@ export async function record(
     actorName: actor.name,
     ...event,
   });
+}
+
+const quietMinutes = 10;
+
+/** Writes an event unless the same was written in the last ten minutes: a screen that keeps every change would fill the log. */
+export async function recordOnce(
+  tx: Transaction,
+  actor: Pick<Actor, 'practiceId' | 'userId' | 'name'>,
+  event: { action: string; subject: string; detail?: string },
+): Promise<void> {
+  const { practiceId, userId: actorId } = actor;
+  const { action, subject } = event;
+  if (await hasRecentEvent(tx, { practiceId, actorId, action, subject, minutes: quietMinutes })) return;
+  await record(tx, actor, event);
 }
 
 /** The newest events of the practice. */

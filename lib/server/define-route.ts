@@ -94,6 +94,11 @@ export function json(
 ): Response {
   return new Response(JSON.stringify(value), {
     status,
-    headers: { 'content-type': 'application/json', 'cache-control': 'private, no-cache', ...headers },
+    headers: {
+      'content-type': 'application/json',
+      'cache-control': 'private, no-cache',
+      'x-content-type-options': 'nosniff',
+      ...headers,
+    },
   });
 }

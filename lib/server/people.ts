@@ -15,6 +15,7 @@ import {
   insertInvitation,
   insertMembership,
   insertUser,
+  lockPractice,
   selectInvitations,
   selectMembers,
   updateMembership,
@@ -51,6 +52,7 @@ export async function changeRole(
   authorize(actor, 'members.manage');
   const { practiceId } = actor;
   await withPractice(practiceId, async (tx) => {
+    await lockPractice(tx, { practiceId });
     const member = await requireMember(tx, { practiceId, userId });
     if (member.role === role) return;
     await updateMembership(tx, { practiceId, userId, role });
@@ -69,6 +71,7 @@ export async function removeMember(actor: Actor, { userId }: { userId: string })
   authorize(actor, 'members.manage');
   const { practiceId } = actor;
   await withPractice(practiceId, async (tx) => {
+    await lockPractice(tx, { practiceId });
     const member = await requireMember(tx, { practiceId, userId });
     await deleteMembership(tx, { practiceId, userId });
     await keepAdministrator(tx, practiceId);

@@ -77,7 +77,12 @@ function fieldErrors(fields: Record<string, string> | undefined): Problem['error
 export function problemResponse(problem: Problem, headers: Record<string, string> = {}): Response {
   return new Response(JSON.stringify(problem), {
     status: problem.status ?? 500,
-    headers: { 'content-type': 'application/problem+json', 'cache-control': 'no-store', ...headers },
+    headers: {
+      'content-type': 'application/problem+json',
+      'cache-control': 'no-store',
+      'x-content-type-options': 'nosniff',
+      ...headers,
+    },
   });
 }
 

@@ -13,7 +13,7 @@ import type { Actor, SaveOutcome, SectionDetail, SectionSummary } from '@/lib/do
 import type { SectionDocument } from '@/lib/domain/section';
 import { readSection } from '@/lib/domain/validate';
 import { AppError } from '@/lib/errors';
-import { record } from './audit';
+import { record, recordOnce } from './audit';
 import { authorize, may } from './authorize';
 import { readCriteriaInEffect } from './criteria';
 import { requireId } from './require-id';
@@ -131,10 +131,10 @@ export async function saveSection(
     authorize(actor, 'sections.change', own);
     const saved = await updateSection(tx, { practiceId, sectionId, document: draft, baseVersion, userId });
     if (!saved) return { status: 'conflict', current: await readDetail(tx, actor, sectionId) };
-    await record(tx, actor, {
+    await recordOnce(tx, actor, {
       action: 'section.saved',
       subject: draft.title,
-      detail: `version ${saved.version}`,
+      detail: `from version ${saved.version}`,
     });
     return { status: 'saved', version: saved.version, savedAt: saved.updatedAt.toISOString() };
   });

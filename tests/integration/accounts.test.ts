@@ -1,4 +1,6 @@
 import { beforeAll, describe, expect, test } from 'vitest';
+import { database } from '@/db/client';
+import { sweepExpired } from '@/db/queries/people';
 import type { Actor } from '@/lib/domain/dto';
 import { signInForm } from '@/lib/domain/forms';
 import { AppError } from '@/lib/errors';
@@ -206,6 +208,21 @@ describe('sessions', () => {
   });
 });
 
+test('the sweep forgets what has run out, and nothing else', async () => {
+  const person = await addMember(practice.administrator, 'member');
+  const [living, expired] = [await signedIn(person.email), await signedIn(person.email)].map(
+    (browser) => browser.cookies.get(cookieName)!.value,
+  );
+  await asOwner((client) =>
+    client.query(`update sessions set expires_at = now() - interval '1 second' where id = $1`, [expired]),
+  );
+  await sweepExpired(database());
+  const { rows } = await asOwner((client) =>
+    client.query('select id from sessions where user_id = $1', [person.userId]),
+  );
+  expect(rows).toEqual([{ id: living }]);
+});
+
 describe('resetting a password', () => {
   async function askFor(person: Actor): Promise<string> {
     await requestReset({ email: person.email });
@@ -349,6 +366,16 @@ describe('members', () => {
     await removeMember(practice.administrator, { userId: person.userId });
     expect(await actorOfSession(id)).toBeNull();
     expect(await codeOf(signedIn(person.email))).toBe('forbidden');
+  });
+
+  test('two administrators who put each other down at once leave one', async () => {
+    const own = await makePractice();
+    const second = await addMember(own.administrator, 'administrator');
+    const codes = await Promise.all([
+      codeOf(changeRole(own.administrator, { userId: second.userId, role: 'member' })),
+      codeOf(changeRole(second, { userId: own.administrator.userId, role: 'member' })),
+    ]);
+    expect(codes.toSorted()).toEqual(['done', 'invalid-input']);
   });
 
   test('the last administrator neither leaves nor steps down', async () => {

@@ -133,6 +133,20 @@ describe('keeping sections', () => {
       subject: sampleSection().title,
     });
   });
+
+  test('a person who goes on changing a section stands in the log once, every version stays', async () => {
+    const { id } = await fresh();
+    const document = { ...sampleSection(), title: unique('Kept at once') };
+    for (let version = 1; version <= 5; version++) {
+      await saveSection(practice.author, { sectionId: id, document, baseVersion: version });
+    }
+    const events = await listAuditEvents(practice.administrator);
+    expect(events.filter(({ subject }) => subject === document.title)).toHaveLength(1);
+    const { rowCount } = await asSuperuser((client) =>
+      client.query('select 1 from section_versions where section_id = $1', [id]),
+    );
+    expect(rowCount).toBe(6);
+  });
 });
 
 describe('the library', () => {

@@ -1,8 +1,10 @@
 // The worker process: takes jobs from the queue in PostgreSQL. Any number of them may run, on any number of machines.
-import { makeWorkerUtils, type Runner, run, type TaskList } from 'graphile-worker';
+import { makeWorkerUtils, parseCronItems, type Runner, run, type TaskList } from 'graphile-worker';
 import { createTransport } from 'nodemailer';
 import { Pool } from 'pg';
 import { z } from 'zod';
+import { database } from '@/db/client';
+import { sweepExpired } from '@/db/queries/people';
 import { env } from '../env';
 import { log } from '../log';
 import { deliverMail } from '../mail/deliver';
@@ -34,6 +36,10 @@ export async function startWorker({ queueUrl, smtpUrl }: WorkerOptions): Promise
       const sent = await deliverMail(mailJob.parse(payload), { transport, address: env().MAIL_FROM });
       log.info({ job: job.id, sent }, 'mail');
     },
+    sweep: async () => {
+      await sweepExpired(database());
+      log.info('swept');
+    },
   };
   const guard = await freeDeadJobs(queue);
   const runner = await run({
@@ -41,7 +47,7 @@ export async function startWorker({ queueUrl, smtpUrl }: WorkerOptions): Promise
     taskList: tasks,
     concurrency: 2,
     pollInterval: 2000,
-    parsedCronItems: [], // otherwise it looks for a crontab file and says so
+    parsedCronItems: parseCronItems([{ task: 'sweep', match: '17 3 * * *' }]),
     noHandleSignals: true, // its own handler ends the process before the pools are closed
     preset: {
       // by default the "job done" query is fired and forgotten, so that a job that ends during a shutdown stays locked
