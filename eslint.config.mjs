@@ -103,7 +103,7 @@ export default tseslint.config(
       '**/*.d.ts',
       'tests/integration/global-setup.ts',
     ],
-    rules: { 'import-x/no-default-export': 'off' },
+    rules: { 'import-x/no-default-export': 'off', 'import/no-anonymous-default-export': 'off' },
   },
   {
     files: ['{app,components,lib,db,scripts}/**/*.{ts,tsx}'],

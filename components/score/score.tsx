@@ -15,7 +15,7 @@ import { ResultStaves } from './result-staves';
 import { SectionStave } from './section-stave';
 import { TableView } from './table/table-view';
 import { useAnswer } from './use-answer';
-import { extentOf, useCamera } from './use-camera';
+import { extentOf, focusOf, useCamera } from './use-camera';
 import { type KeepingActions, useKeeping } from './use-keeping';
 
 interface ScoreProps extends KeepingActions {
@@ -87,7 +87,7 @@ function Staves() {
   // the frame stands still under a hand that drags
   const [held, setHeld] = useState(fresh);
   if (!isDragging && held !== fresh) setHeld(fresh);
-  const view = useCamera(container, held);
+  const view = useCamera(container, held, focusOf(document));
   useWheelZoom(container, view.zoom);
   return (
     <div

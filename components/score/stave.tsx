@@ -1,7 +1,8 @@
 'use client';
+import { ticks } from 'd3';
 import { type Camera, toScreenX } from '@/components/editor/kernels/camera';
 import { attention, rule, secondary } from './palette';
-import { roundTicks, writeSignificant } from './write-number';
+import { writeSignificant } from './write-number';
 
 /** One curve of a stave. */
 export interface Series {
@@ -63,7 +64,7 @@ export function Stave({ title, unit, series, camera, hairline, isDownward = fals
         role="img"
         aria-label={`${title}: ${series.map(({ label }) => label).join('; ')}`}
       >
-        {roundTicks(0, top, 2).map((tick) => (
+        {ticks(0, top, 2).map((tick) => (
           <g key={tick}>
             <line
               x1={0}

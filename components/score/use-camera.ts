@@ -30,8 +30,35 @@ export interface CameraHandle {
   readonly isWhole: boolean;
 }
 
+/** Least height of the ground on screen, pixels: a long section on a phone begins closer, about its walls. */
+const leastGround = 150;
+
+function focusCamera(whole: Camera, extent: Extent, focus: number): Camera {
+  const ground = (extent.yMax - extent.yMin) * whole.scale;
+  if (ground >= leastGround) return whole;
+  const scale = (whole.scale * leastGround) / ground;
+  const span = whole.width / scale;
+  const left = Math.min(Math.max(focus - span / 2, extent.xMin), extent.xMax - span);
+  const height = leastGround + 10;
+  return { left, top: extent.yMax, scale, width: whole.width, height };
+}
+
+/** Chainage of what the section is about: its walls, else its structures. */
+export function focusOf(document: SectionDocument): number {
+  const points = [
+    ...document.barriers.flatMap(({ path }) => path),
+    ...document.structures.flatMap(({ base }) => base),
+  ];
+  const xs = (points.length > 0 ? points : document.zones.flatMap(({ outline }) => outline)).map(([x]) => x);
+  return (Math.min(...xs) + Math.max(...xs)) / 2;
+}
+
 /** The view of the section in a container of changing width; follows the extent until the user moves closer. */
-export function useCamera(container: RefObject<HTMLElement | null>, extent: Extent): CameraHandle {
+export function useCamera(
+  container: RefObject<HTMLElement | null>,
+  extent: Extent,
+  focus: number,
+): CameraHandle {
   const [size, setSize] = useState({ width: 960, maxHeight: 400 });
   const [moved, setMoved] = useState<Camera | null>(null);
   useEffect(() => {
@@ -47,19 +74,20 @@ export function useCamera(container: RefObject<HTMLElement | null>, extent: Exte
     return () => observer.disconnect();
   }, [container]);
   const whole = useMemo(() => fitCamera(extent, size.width, size.maxHeight, 190), [extent, size]);
+  const standard = useMemo(() => focusCamera(whole, extent, focus), [whole, extent, focus]);
   const camera = useMemo(
-    () => (moved ? { ...moved, width: whole.width, height: whole.height } : whole),
-    [moved, whole],
+    () => ({ ...(moved ?? standard), width: standard.width, height: standard.height }),
+    [moved, standard],
   );
   return {
     camera,
-    isWhole: moved === null,
+    isWhole: Math.abs(camera.scale / whole.scale - 1) < 1e-3,
     zoom: (factor, px = camera.width / 2, py = camera.height / 2) => {
       const next = zoomCamera(camera, factor, px, py, whole.scale);
-      setMoved(next.scale <= whole.scale * 1.001 ? null : next);
+      setMoved(next.scale <= whole.scale * 1.001 ? whole : next);
     },
     pan: (dx, dy) =>
       setMoved({ ...camera, left: camera.left - dx / camera.scale, top: camera.top + dy / camera.scale }),
-    reset: () => setMoved(null),
+    reset: () => setMoved(whole),
   };
 }

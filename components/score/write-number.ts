@@ -22,16 +22,3 @@ function superscript(exponent: number): string {
 export function writeLevel(value: number): string {
   return value.toFixed(2).replace('-', '−').replace('−0.00', '0.00');
 }
-
-/** Ticks of an axis at round values, a handful of them. */
-export function roundTicks(low: number, high: number, most: number): number[] {
-  const span = high - low;
-  if (!(span > 0)) return [low];
-  const rough = span / most;
-  const power = 10 ** Math.floor(Math.log10(rough));
-  const step = [1, 2, 5, 10].map((m) => m * power).find((s) => s >= rough)!;
-  const ticks: number[] = [];
-  for (let t = Math.ceil(low / step) * step; t <= high + 1e-9 * step; t += step)
-    ticks.push(Number(t.toFixed(9)));
-  return ticks;
-}

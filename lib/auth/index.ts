@@ -7,7 +7,6 @@ export {
   openSession,
   readSession,
   sessionCookieName,
-  type SignInSession,
 } from './lucia';
 export { hashPassword, verifyNobody, verifyPassword } from './password';
 export { hashSecret, makeSecret } from './secrets';

@@ -8,7 +8,7 @@ import { checkFlotation } from './flotation';
 import { checkHeavePrisms } from './heave-prism';
 
 export { cautions } from './cautions';
-export { type CheckInput, chooseCriterion } from './check';
+export type { CheckInput } from './check';
 export { exampleCriteria } from './example-criteria';
 
 /**

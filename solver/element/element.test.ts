@@ -49,16 +49,19 @@ describe.each([
 });
 
 describe('quadrature', () => {
-  it.each([1, 2, 3, 4, 5, 6])('on the triangle integrates every monomial up to degree %i: p! q! / (p + q + 2)!', (degree) => {
-    const { points, weights } = triangleRule(degree);
-    for (let p = 0; p <= degree; p++) {
-      for (let q = 0; p + q <= degree; q++) {
-        let sum = 0;
-        weights.forEach((weight, i) => (sum += weight * points[2 * i]! ** p * points[2 * i + 1]! ** q));
-        expect(sum).toBeCloseTo((factorial(p) * factorial(q)) / factorial(p + q + 2), 14);
+  it.each([1, 2, 3, 4, 5, 6])(
+    'on the triangle integrates every monomial up to degree %i: p! q! / (p + q + 2)!',
+    (degree) => {
+      const { points, weights } = triangleRule(degree);
+      for (let p = 0; p <= degree; p++) {
+        for (let q = 0; p + q <= degree; q++) {
+          let sum = 0;
+          weights.forEach((weight, i) => (sum += weight * points[2 * i]! ** p * points[2 * i + 1]! ** q));
+          expect(sum).toBeCloseTo((factorial(p) * factorial(q)) / factorial(p + q + 2), 14);
+        }
       }
-    }
-  });
+    },
+  );
 
   it.each([1, 3, 5])('on the line integrates every monomial up to degree %i', (degree) => {
     const { points, weights } = lineRule(degree);

@@ -42,7 +42,8 @@ function expandOrbit([a, b]: Orbit): [number, number][] {
   ];
   const distinct: [number, number][] = [];
   for (const point of all) {
-    if (!distinct.some(([x, y]) => Math.abs(x - point[0]) + Math.abs(y - point[1]) < 1e-9)) distinct.push(point);
+    if (!distinct.some(([x, y]) => Math.abs(x - point[0]) + Math.abs(y - point[1]) < 1e-9))
+      distinct.push(point);
   }
   return distinct;
 }

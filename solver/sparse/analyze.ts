@@ -162,7 +162,7 @@ function findSupernodes(parent: Int32Array, counts: Int32Array): Int32Array {
   const size = parent.length;
   const starts: number[] = [];
   const zeros: number[] = [];
-  for (let j = 0; j < size; ) {
+  for (let j = 0; j < size;) {
     const begin = j;
     while (j + 1 < size && parent[j] === j + 1 && counts[j] === counts[j + 1] + 1) j++;
     j++;
@@ -200,7 +200,12 @@ function isWorthMerging(columns: number, stored: number, zeros: number): boolean
 
 type Fronts = Pick<SymbolicFactor, 'below' | 'belowStart' | 'relative' | 'supernodeParent'>;
 
-function buildFronts(size: number, upper: UpperPattern, parent: Int32Array, supernodeStart: Int32Array): Fronts {
+function buildFronts(
+  size: number,
+  upper: UpperPattern,
+  parent: Int32Array,
+  supernodeStart: Int32Array,
+): Fronts {
   const count = supernodeStart.length - 1;
   const supernodeOfLast = new Int32Array(size).fill(-1);
   const supernodeOf = new Int32Array(size);

@@ -64,9 +64,21 @@ export function factorize(
       extendAdd(symbolic, memory, c, s, tops[1 - parity], update);
     }
     const failed = eliminateFront(panels, panelStart[s], own, rest);
-    if (failed >= 0) return { status: 'not-positive-definite', row: symbolic.permutation[supernodeStart[s] + failed] };
+    if (failed >= 0)
+      return { status: 'not-positive-definite', row: symbolic.permutation[supernodeStart[s] + failed] };
     for (let j = 0; j < rest; j += 2) {
-      updateColumns(panels, panelStart[s] + own, own + rest, own, j, rest, stack, update, rest, Math.min(2, rest - j));
+      updateColumns(
+        panels,
+        panelStart[s] + own,
+        own + rest,
+        own,
+        j,
+        rest,
+        stack,
+        update,
+        rest,
+        Math.min(2, rest - j),
+      );
     }
     if (symbolic.supernodeParent[s] !== -1) tops[parity] += rest * rest;
   }

@@ -294,7 +294,12 @@ function mergeIndistinguishable(graph: QuotientGraph, pivot: number, stamp: numb
 
 function mergeIfSame(graph: QuotientGraph, first: number, second: number, mark: number): void {
   const { lists, start, length, elementCount, weight, stamp, parent } = graph;
-  if (weight[second] === 0 || length[first] !== length[second] || elementCount[first] !== elementCount[second]) return;
+  if (
+    weight[second] === 0 ||
+    length[first] !== length[second] ||
+    elementCount[first] !== elementCount[second]
+  )
+    return;
   for (let q = start[second]; q < start[second] + length[second]; q++) if (stamp[lists[q]] !== mark) return;
   weight[first] += weight[second]; // both negative while marked
   weight[second] = 0;
@@ -337,7 +342,10 @@ function finishElement(
   const left = size - eliminated - massEliminated;
   for (let p = start[pivot]; p < write; p++) {
     const variable = lists[p];
-    const bound = Math.max(0, Math.min(degree[variable] + remaining - weight[variable], left - weight[variable]));
+    const bound = Math.max(
+      0,
+      Math.min(degree[variable] + remaining - weight[variable], left - weight[variable]),
+    );
     degree[variable] = bound;
     link(graph, variable);
     minimumDegree = Math.min(minimumDegree, bound);

@@ -65,15 +65,13 @@ function solveAll(matrix: CscMatrix, rhs: Float64Array): Float64Array {
   return x;
 }
 
-const randomMatrix = fc
-  .integer({ min: 1, max: 60 })
-  .chain((size) =>
-    fc
-      .array(fc.tuple(fc.nat(size - 1), fc.nat(size - 1), fc.double({ min: 0.01, max: 10, noNaN: true })), {
-        maxLength: 4 * size,
-      })
-      .map((pairs) => fromPairs(size, pairs)),
-  );
+const randomMatrix = fc.integer({ min: 1, max: 60 }).chain((size) =>
+  fc
+    .array(fc.tuple(fc.nat(size - 1), fc.nat(size - 1), fc.double({ min: 0.01, max: 10, noNaN: true })), {
+      maxLength: 4 * size,
+    })
+    .map((pairs) => fromPairs(size, pairs)),
+);
 
 describe('sparse Cholesky', () => {
   it('orders every row exactly once', () => {
