@@ -109,7 +109,7 @@ export function parseNumber(text: string, quantity: Quantity, system: 'si' | 'us
           : `The unit “${match[2]!.trim()}” is not known here; use ${known}.`,
     };
   }
-  const value = sum * factor;
+  const value = Number((sum * factor).toPrecision(12)); // 24 ft is 7.3152 m, not 7.315200000000001
   const isPlain = factor === 1 && /^[-+]?\d+(\.\d+)?$/.test(match[1]!.trim());
   return { ok: true, value, understood: isPlain ? '' : `${writeShort(value)} ${siNames[quantity]}`.trim() };
 }

@@ -64,7 +64,7 @@ export function NumberField({
     setUnderstood('');
   };
   return (
-    <span className={cn('inline-grid justify-items-start', className)}>
+    <span className={cn('relative inline-grid justify-items-start', className)}>
       {isLabelled && (
         <label htmlFor={id} className="text-[0.8125rem] text-secondary">
           {label}
@@ -92,7 +92,10 @@ export function NumberField({
         <span
           id={`${id}-note`}
           role={message ? 'alert' : undefined}
-          className={cn('max-w-56 text-[0.8125rem]', message ? 'text-attention' : 'text-secondary')}
+          className={cn(
+            'absolute top-full left-0 z-20 mt-0.5 w-max max-w-56 rounded-control border border-rule bg-paper px-1.5 py-0.5 text-[0.8125rem] leading-snug',
+            message ? 'text-attention' : 'text-secondary',
+          )}
         >
           {message || `= ${understood}`}
         </span>
