@@ -6,39 +6,46 @@ import { createAnalysisWorker } from '@/lib/analysis/run-in-browser';
 /** Rest after the last change before the full solve begins. */
 const rest = 250;
 
-/** Keeps the answer in step with the document: a live one at every change, a full one at rest. */
+/**
+ * Keeps the answer in step with the document: a live one at every change, a full one at rest. Each has a worker of its own, so that an edit
+ * never waits for a full solve that it has made pointless.
+ */
 export function useAnswer(): void {
   const store = useScoreStore();
   useEffect(() => {
-    const worker = createAnalysisWorker();
+    const workers = { live: createAnalysisWorker(), full: createAnalysisWorker() };
     let timer: ReturnType<typeof setTimeout> | undefined;
-    let isBusy = false;
-    let next: 'live' | 'full' | null = null;
+    const isBusy = { live: false, full: false };
+    const isWanted = { live: false, full: false };
 
     const ask = async (effort: 'live' | 'full'): Promise<void> => {
-      if (isBusy) {
-        next = effort;
+      if (isBusy[effort]) {
+        isWanted[effort] = true;
         return;
       }
-      isBusy = true;
-      next = null;
+      isBusy[effort] = true;
+      isWanted[effort] = false;
       const { document, detail, situationId } = store.getState();
       const began = performance.now();
-      const answer = await worker.analyze(document, {
+      const answer = await workers[effort].analyze(document, {
         criteria: detail.criteria,
         effort,
         ...(effort === 'live' ? { situations: [situationId] } : {}),
       });
-      isBusy = false;
-      if (answer.status === 'answered') {
+      isBusy[effort] = false;
+      // a full answer to an older document has nothing to say; a live one still shows where the hand went
+      const isWelcome = effort === 'live' || store.getState().document === document;
+      if (answer.status === 'answered' && isWelcome) {
         const { outcome } = answer;
-        if (outcome.status === 'solved') {
+        const known = store.getState().answer;
+        const isBettered = effort === 'live' && known?.effort === 'full' && known.document === document;
+        if (outcome.status === 'solved' && !isBettered) {
           const { result, fields } = outcome;
           store.getState().setAnswer({ document, result, fields, effort, at: Date.now() });
         } else if (outcome.status === 'refused') {
           store.getState().setRefusal({ document, problem: outcome.problem, issues: outcome.issues });
         }
-        performance.measure('underfall:answer', { start: began, end: performance.now(), detail: { effort } });
+        performance.measure(`underfall:${effort}-answer`, { start: began, end: performance.now() });
       } else if (answer.status === 'failed') {
         const problem = {
           type: '/problems/internal',
@@ -47,7 +54,7 @@ export function useAnswer(): void {
         };
         store.getState().setRefusal({ document, problem, issues: [] });
       }
-      if (next) void ask(next);
+      if (isWanted[effort]) void ask(effort);
     };
     const settle = (): void => {
       clearTimeout(timer);
@@ -70,7 +77,8 @@ export function useAnswer(): void {
     return () => {
       clearTimeout(timer);
       unsubscribe();
-      worker.stop();
+      workers.live.stop();
+      workers.full.stop();
     };
   }, [store]);
 }
