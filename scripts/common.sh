@@ -102,8 +102,8 @@ free_port() {
 }
 
 source_sum() {
-  find app components lib solver db scripts public proxy.ts instrumentation-client.ts next.config.ts postcss.config.mjs \
-    package-lock.json tsconfig.json -type f ! -name '*.test.ts' ! -name '*.test.tsx' -print0 2>/dev/null |
+  { find app components lib solver db scripts public proxy.ts instrumentation-client.ts next.config.ts postcss.config.mjs \
+    package-lock.json tsconfig.json -type f ! -name '*.test.ts' ! -name '*.test.tsx' -print0 2>/dev/null || true; } |
     sort -z | xargs -0 sha256sum | sha256sum | cut -d' ' -f1
 }
 
