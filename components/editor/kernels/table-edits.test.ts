@@ -34,4 +34,8 @@ describe('table edits', () => {
     ]);
     expect(readPoints([['1', 'two']])).toBeNull();
   });
+
+  it('reads pasted feet as the international foot', () => {
+    expect(readPoints([['10', '-100']], 0.3048)).toEqual([[3.048, -30.48]]);
+  });
 });

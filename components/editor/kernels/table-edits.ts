@@ -95,9 +95,10 @@ export function proposeLens(document: SectionDocument): Point[] {
  * Reads pasted rows of two numbers, as a spreadsheet copies them.
  *
  * @param rows - Cells as text.
+ * @param metres - Length of one pasted unit, m.
  * @returns Points, m; null where a row is not two numbers. A row of headings at the top is passed over.
  */
-export function readPoints(rows: readonly (readonly string[])[]): Point[] | null {
+export function readPoints(rows: readonly (readonly string[])[], metres = 1): Point[] | null {
   const filled = rows.filter((row) => row.some((cell) => cell.trim() !== ''));
   const numbers = filled.map((row) =>
     row.slice(0, 2).map((cell) => Number(cell.trim().replace('−', '-').replace(',', '.'))),
@@ -106,5 +107,5 @@ export function readPoints(rows: readonly (readonly string[])[]): Point[] | null
   const points = isHeading ? numbers.slice(1) : numbers;
   if (points.length === 0 || points.some((row) => row.length < 2 || row.some((n) => !Number.isFinite(n))))
     return null;
-  return points.map(([x, y]) => [x!, y!]);
+  return points.map(([x, y]) => [x! * metres, y! * metres]);
 }

@@ -4,6 +4,7 @@ import { useScore, useScoreStore } from '@/components/editor/state/score-context
 import { Button } from '@/components/ui/button';
 import { sourceWords } from '@/lib/format/words';
 import type { Material } from '@/lib/domain/section';
+import { unitName } from '@/lib/domain/units';
 import { Cell, ChoiceCell, Part, RemoveCell, TextCell } from './cells';
 import { NumberField } from './number-field';
 import { PointsCell } from './points-cell';
@@ -14,6 +15,7 @@ const sources = [['', 'not stated'] as const, ...Object.entries(sourceWords)];
 /** Materials and their numbers. */
 export function MaterialsPart() {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const materials = useScore(({ document }) => document.materials);
   const zones = useScore(({ document }) => document.zones);
   const add = (): void =>
@@ -34,10 +36,10 @@ export function MaterialsPart() {
       title="Materials"
       columns={[
         'Name',
-        'k along, m/s',
-        'k across, m/s',
+        `k along, ${unitName('permeability', units)}`,
+        `k across, ${unitName('permeability', units)}`,
         'Angle, °',
-        'γsat',
+        `γsat, ${unitName('unit-weight', units)}`,
         'd50, mm',
         'k range, ×',
         'k from',

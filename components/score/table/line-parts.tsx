@@ -2,6 +2,7 @@
 import { freshId, proposeWall, surfaceAt, boundsOf } from '@/components/editor/kernels/table-edits';
 import { useScore, useScoreStore } from '@/components/editor/state/score-context';
 import type { Condition, Point } from '@/lib/domain/section';
+import { unitName } from '@/lib/domain/units';
 import { Cell, ChoiceCell, Part, RemoveCell, TextCell } from './cells';
 import { NumberField } from './number-field';
 import { PointsCell } from './points-cell';
@@ -93,6 +94,7 @@ const conditionWords = [
 /** Edges of the outline, or drains inside the ground: both carry a condition along a path. */
 export function LinesPart({ kind }: { kind: 'edges' | 'drains' }) {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const lines = useScore(({ document }) => document[kind]);
   const noun = kind === 'edges' ? 'edge' : 'drain';
   const add = (): void => {
@@ -119,7 +121,7 @@ export function LinesPart({ kind }: { kind: 'edges' | 'drains' }) {
   return (
     <Part
       title={kind === 'edges' ? 'Edges' : 'Drains'}
-      columns={['Name', 'Condition', 'Level, m or name', 'Path', 'Row']}
+      columns={['Name', 'Condition', `Level, ${unitName('length', units)} or name`, 'Path', 'Row']}
       onAdd={add}
       addWords={`Add ${kind === 'edges' ? 'an edge' : 'a drain'}`}
     >

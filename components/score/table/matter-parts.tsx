@@ -2,6 +2,7 @@
 import { boundsOf, freshId, surfaceAt } from '@/components/editor/kernels/table-edits';
 import { useScore, useScoreStore } from '@/components/editor/state/score-context';
 import { Button } from '@/components/ui/button';
+import { unitName } from '@/lib/domain/units';
 import { Cell, ChoiceCell, Part, RemoveCell, TextCell } from './cells';
 import { NumberField } from './number-field';
 import { PointsCell } from './points-cell';
@@ -9,9 +10,18 @@ import { PointsCell } from './points-cell';
 /** Title, geometry, datum, averaging length. */
 export function SectionPart() {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const { title, geometry, datum, assessment } = useScore(({ document }) => document);
   return (
-    <Part title="Section" columns={['Title', 'Geometry', 'Level datum', 'Averaging length at the exit, m']}>
+    <Part
+      title="Section"
+      columns={[
+        'Title',
+        'Geometry',
+        'Level datum',
+        `Averaging length at the exit, ${unitName('length', units)}`,
+      ]}
+    >
       <tr>
         <Cell>
           <TextCell
@@ -71,6 +81,7 @@ export function SectionPart() {
 /** Structures, their bases and weights. */
 export function StructuresPart() {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const structures = useScore(({ document }) => document.structures);
   const add = (): void => {
     const { document } = store.getState();
@@ -87,7 +98,7 @@ export function StructuresPart() {
   return (
     <Part
       title="Structures"
-      columns={['Name', 'Weight, kN per metre', 'Where the weight comes from', 'Base', 'Row']}
+      columns={['Name', `Weight, ${unitName('force', units)}`, 'Where the weight comes from', 'Base', 'Row']}
       onAdd={add}
       addWords="Add a structure"
     >
@@ -164,6 +175,7 @@ export function StructuresPart() {
 /** Situations and their levels, one column a level. */
 export function SituationsPart() {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const situations = useScore(({ document }) => document.situations);
   const mayChange = useScore(({ detail }) => detail.mayChange);
   const names = [...new Set(situations.flatMap(({ levels }) => Object.keys(levels)))];
@@ -187,7 +199,7 @@ export function SituationsPart() {
     <>
       <Part
         title="Situations"
-        columns={['Name', ...names.map((name) => `${name}, m`), 'Row']}
+        columns={['Name', ...names.map((name) => `${name}, ${unitName('length', units)}`), 'Row']}
         onAdd={add}
         addWords="Add a situation"
       >
@@ -257,6 +269,7 @@ export function SituationsPart() {
 /** Piezometers with their readings. */
 export function PiezometersPart() {
   const store = useScoreStore();
+  const units = useScore((state) => state.units);
   const piezometers = useScore(({ document }) => document.piezometers);
   const situations = useScore(({ document }) => document.situations);
   const add = (): void => {
@@ -274,9 +287,9 @@ export function PiezometersPart() {
       title="Piezometers"
       columns={[
         'Name',
-        'Chainage, m',
-        'Elevation of the tip, m',
-        ...situations.map(({ id, name }) => `Head in ${name ?? id}, m`),
+        `Chainage, ${unitName('length', units)}`,
+        `Elevation of the tip, ${unitName('length', units)}`,
+        ...situations.map(({ id, name }) => `Head in ${name ?? id}, ${unitName('length', units)}`),
         'Row',
       ]}
       onAdd={add}

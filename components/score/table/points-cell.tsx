@@ -5,6 +5,7 @@ import { readPoints } from '@/components/editor/kernels/table-edits';
 import { useScore } from '@/components/editor/state/score-context';
 import { Button } from '@/components/ui/button';
 import type { Point } from '@/lib/domain/section';
+import { toShown, unitName } from '@/lib/domain/units';
 import { writeLevel } from '../write-number';
 import { NumberField } from './number-field';
 
@@ -19,6 +20,7 @@ interface PointsCellProps {
 /** The points of an outline or a path: a grid on demand, which takes rows pasted from a spreadsheet. */
 export function PointsCell({ label, points, least, onCommit }: PointsCellProps) {
   const mayChange = useScore((state) => state.detail.mayChange);
+  const units = useScore((state) => state.units);
   const [message, setMessage] = useState('');
   const replace = (index: number, axis: 0 | 1) => (value: number | undefined) => {
     if (value === undefined) return;
@@ -31,22 +33,26 @@ export function PointsCell({ label, points, least, onCommit }: PointsCellProps) 
     if (!mayChange || !/[\t\n]/.test(text)) return;
     event.preventDefault();
     const { data } = parse<string[]>(text, {
-      delimiter: text.includes('\t') ? '\t' : ';',
+      delimiter: ['\t', ';'].find((mark) => text.includes(mark)) ?? ',',
       skipEmptyLines: true,
     });
-    const read = readPoints(data);
-    if (!read || read.length < least) {
-      setMessage(`Paste at least ${least} rows of two numbers, chainage and elevation.`);
+    const read = readPoints(data, 1 / toShown(1, 'length', units));
+    if (!read) {
+      setMessage('Paste rows of two numbers, chainage and elevation.');
       return;
     }
     setMessage('');
-    onCommit(read);
+    // rows go in from the cell pasted into, as in a spreadsheet; what stands below them stays
+    const row = (event.target as Element).closest('tr')?.dataset.point;
+    const from = row === undefined ? points.length : Number(row);
+    onCommit([...points.slice(0, from), ...read, ...points.slice(from + read.length)]);
   };
   return (
     <details onPaste={paste}>
       <summary className="min-h-6 text-action underline decoration-action/40 underline-offset-4">
         <span className="sr-only">{label}: </span>
-        {points.length} points, {writeLevel(points[0]![0])}, {writeLevel(points[0]![1])} …
+        {points.length} points, {writeLevel(toShown(points[0]![0], 'length', units))},{' '}
+        {writeLevel(toShown(points[0]![1], 'length', units))} …
       </summary>
       <table className="mt-1">
         <caption className="text-left text-[0.8125rem] text-secondary">
@@ -54,8 +60,8 @@ export function PointsCell({ label, points, least, onCommit }: PointsCellProps) 
         </caption>
         <thead>
           <tr className="text-left text-[0.8125rem] text-secondary">
-            <th scope="col">Chainage</th>
-            <th scope="col">Elevation</th>
+            <th scope="col">Chainage, {unitName('length', units)}</th>
+            <th scope="col">Elevation, {unitName('length', units)}</th>
             <th scope="col">
               <span className="sr-only">Remove</span>
             </th>
@@ -63,7 +69,7 @@ export function PointsCell({ label, points, least, onCommit }: PointsCellProps) 
         </thead>
         <tbody>
           {points.map((point, index) => (
-            <tr key={index}>
+            <tr key={index} data-point={index}>
               <td className="py-0.5 pr-2">
                 <NumberField
                   label={`${label}, point ${index + 1}, chainage`}
