@@ -40,6 +40,7 @@ export function MaterialsPart() {
         `k across, ${unitName('permeability', units)}`,
         'Angle, °',
         `γsat, ${unitName('unit-weight', units)}`,
+        'Porosity',
         'd50, mm',
         'k range, ×',
         'k from',
@@ -93,6 +94,20 @@ export function MaterialsPart() {
                   set('Unit weight', (m) => {
                     if (v === undefined) delete m.saturatedUnitWeight;
                     else m.saturatedUnitWeight = v;
+                  })
+                }
+              />
+            </Cell>
+            <Cell>
+              <NumberField
+                label={`Porosity of ${material.name}`}
+                quantity="number"
+                value={material.porosity}
+                isOptional
+                onCommit={(v) =>
+                  set('Porosity', (m) => {
+                    if (v === undefined) delete m.porosity;
+                    else m.porosity = v;
                   })
                 }
               />

@@ -32,11 +32,11 @@ export function PointsCell({ label, points, least, onCommit }: PointsCellProps) 
     const text = event.clipboardData.getData('text');
     if (!mayChange || !/[\t\n]/.test(text)) return;
     event.preventDefault();
-    const { data } = parse<string[]>(text, {
-      delimiter: ['\t', ';'].find((mark) => text.includes(mark)) ?? ',',
-      skipEmptyLines: true,
-    });
-    const read = readPoints(data, 1 / toShown(1, 'length', units));
+    const delimiter = ['\t', ';'].find((mark) => text.includes(mark)) ?? ',';
+    const { data } = parse<string[]>(text, { delimiter, skipEmptyLines: true });
+    // between commas a third column may be a decimal comma: 1,5,2,3 is not the point (1, 5)
+    const isAmbiguous = delimiter === ',' && data.some((row) => row.length > 2);
+    const read = isAmbiguous ? null : readPoints(data, 1 / toShown(1, 'length', units));
     if (!read) {
       setMessage('Paste rows of two numbers, chainage and elevation.');
       return;
