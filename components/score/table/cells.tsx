@@ -93,7 +93,7 @@ export function Part({ title, columns, onAdd, addWords, children }: PartProps) {
           </Button>
         )}
       </div>
-      <div className="mt-1 overflow-x-auto pb-1" role="region" aria-labelledby={id} tabIndex={0}>
+      <div className="relative mt-1 overflow-x-auto pb-1" role="region" aria-labelledby={id} tabIndex={0}>
         <table className="border-collapse text-[0.9375rem]">
           <thead>
             <tr>
