@@ -62,6 +62,16 @@ function paintGround(
 const parts6 = [0, 3, 5, 3, 1, 4, 5, 4, 2, 3, 4, 5];
 const parts3 = [0, 1, 2];
 
+/** Pixels below which an element is filled as one flat triangle. */
+const smallElement = 10;
+
+function spanOf(coordinates: Float64Array, elements: Int32Array, base: number): number {
+  const [a, b, c] = [2 * elements[base]!, 2 * elements[base + 1]!, 2 * elements[base + 2]!];
+  const xs = [coordinates[a]!, coordinates[b]!, coordinates[c]!];
+  const ys = [coordinates[a + 1]!, coordinates[b + 1]!, coordinates[c + 1]!];
+  return Math.max(Math.max(...xs) - Math.min(...xs), Math.max(...ys) - Math.min(...ys));
+}
+
 /** Fills each part of each element band by band, cutting the triangle at the band's two levels. */
 function paintBands(context: CanvasRenderingContext2D, fields: SituationFields, camera: Camera): void {
   const { coordinates, elements, heads, order, headRange } = fields;
@@ -70,10 +80,12 @@ function paintBands(context: CanvasRenderingContext2D, fields: SituationFields, 
   const step = (high - low) / bandCount;
   if (!(step > 0)) return;
   const stride = order === 1 ? 3 : 6;
-  const parts = order === 1 ? parts3 : parts6;
   const paths = headBands.map(() => new Path2D());
   const triangle = new Float64Array(9);
   for (let base = 0; base < elements.length; base += stride) {
+    // an element of a few pixels shows no curve: its corners do
+    const isFine = order === 2 && spanOf(coordinates, elements, base) * camera.scale > smallElement;
+    const parts = isFine ? parts6 : parts3;
     for (let p = 0; p < parts.length; p += 3) {
       for (let k = 0; k < 3; k++) {
         const node = elements[base + parts[p + k]!]!;
@@ -106,8 +118,8 @@ function addTriangle(triangle: Float64Array, paths: readonly Path2D[]): void {
     if (piece.length < 9) continue;
     const path = paths[band]!;
     path.moveTo(piece[0]!, piece[1]!);
+    // filling closes each piece by itself; closing them one by one costs the browser more than all the rest
     for (let k = 3; k < piece.length; k += 3) path.lineTo(piece[k]!, piece[k + 1]!);
-    path.closePath();
   }
 }
 
