@@ -164,7 +164,7 @@ database_urls() {
 }
 
 start_product_services() {
-  start_service inbox npm run --silent inbox
+  start_service inbox node --import tsx scripts/mail-inbox.ts
   start_service worker node dist/worker.js
   start_service web node node_modules/next/dist/bin/next start -H "${UNDERFALL_HOST:-127.0.0.1}" -p "$WEB_PORT"
   wait_for_url "http://127.0.0.1:$WEB_PORT/api/health" 60 || {

@@ -22,7 +22,7 @@ cleanup() {
   bash scripts/pg.sh stop "$cluster" 2>/dev/null || true
   rm -f "$running"
 }
-trap 'cleanup; exit 0' INT TERM
+trap 'cleanup; exit 0' INT TERM HUP
 trap cleanup EXIT
 echo $$ >"$running"
 
