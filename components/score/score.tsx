@@ -13,6 +13,7 @@ import { ConflictPanel, KeepingLine } from './keeping-line';
 import { MarginNotes } from './margin-notes';
 import { ResultStaves } from './result-staves';
 import { SectionStave } from './section-stave';
+import { SelectedSentence } from './selected-sentence';
 import { TableView } from './table/table-view';
 import { useAnswer } from './use-answer';
 import { extentOf, focusOf, useCamera } from './use-camera';
@@ -100,32 +101,35 @@ function Staves() {
       onPointerLeave={() => setHairline(null)}
     >
       <SectionStave view={view} hairline={hairline} />
-      <div className="flex flex-wrap justify-end gap-4 py-1 text-[0.875rem]">
-        <button
-          type="button"
-          className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
-          onClick={() => view.zoom(1.5)}
-        >
-          closer
-        </button>
-        {!view.isWhole && (
-          <>
-            <button
-              type="button"
-              className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
-              onClick={() => view.zoom(1 / 1.5)}
-            >
-              further
-            </button>
-            <button
-              type="button"
-              className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
-              onClick={() => view.reset()}
-            >
-              whole section
-            </button>
-          </>
-        )}
+      <div className="flex min-h-11 flex-wrap items-center justify-between gap-x-6 gap-y-1 py-1">
+        <SelectedSentence />
+        <div className="ml-auto flex gap-4 text-[0.875rem]">
+          <button
+            type="button"
+            className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
+            onClick={() => view.zoom(1.5)}
+          >
+            closer
+          </button>
+          {!view.isWhole && (
+            <>
+              <button
+                type="button"
+                className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
+                onClick={() => view.zoom(1 / 1.5)}
+              >
+                further
+              </button>
+              <button
+                type="button"
+                className="min-h-6 text-action underline decoration-action/40 underline-offset-4"
+                onClick={() => view.reset()}
+              >
+                whole section
+              </button>
+            </>
+          )}
+        </div>
       </div>
       <ResultStaves camera={view.camera} hairline={hairline} />
     </div>

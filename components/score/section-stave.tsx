@@ -6,7 +6,6 @@ import type { SituationFields } from '@/lib/analysis/fields';
 import { paintSection } from './paint-section';
 import { SectionDrawing } from './section-drawing';
 import { SectionHandles } from './section-handles';
-import { SelectedSentence } from './selected-sentence';
 import type { CameraHandle } from './use-camera';
 
 /** The top stave: ground, water, walls and the live flow net, in true scale. */
@@ -73,7 +72,6 @@ export function SectionStave({ view, hairline }: { view: CameraHandle; hairline:
         )}
         <SectionHandles camera={camera} />
       </svg>
-      <SelectedSentence camera={camera} />
     </div>
   );
 }

@@ -1,41 +1,32 @@
 'use client';
 import type { ReactNode } from 'react';
-import { type Camera, toScreenX, toScreenY } from '@/components/editor/kernels/camera';
 import { useScore, useScoreStore } from '@/components/editor/state/score-context';
 import type { Selection } from '@/components/editor/state/score-store';
 import { describeObject } from '@/lib/domain/describe';
-import type { Point, SectionDocument } from '@/lib/domain/section';
+import type { SectionDocument } from '@/lib/domain/section';
 import { levelOf } from '@/lib/domain/validate-conditions';
 import { NumberField } from './table/number-field';
 
-/** What is selected describes itself in one sentence beside it, its numbers editable in place. */
-export function SelectedSentence({ camera }: { camera: Camera }) {
+/** What is selected describes itself in one sentence under the drawing, so that it never hides it; its numbers are editable in place. */
+export function SelectedSentence() {
   const store = useScoreStore();
   const document = useScore((state) => state.document);
   const selection = useScore((state) => state.selection);
-  const isDragging = useScore((state) => state.isDragging);
+  const mayChange = useScore((state) => state.detail.mayChange);
   const object = selection ? document[selection.kind][selection.index] : undefined;
-  if (!selection || !object) return null;
-  const [x, y] = anchorOf(document, selection);
-  const px = toScreenX(camera, x);
-  const py = toScreenY(camera, y);
-  const isRight = px > camera.width / 2;
-  const narrow = camera.width < 560;
-  const style = narrow
-    ? { left: 0, right: 0, bottom: -4 }
-    : {
-        ...(isRight ? { right: Math.max(4, camera.width - px + 16) } : { left: Math.max(4, px + 16) }),
-        top: Math.min(Math.max(4, py - 20), camera.height - 60),
-      };
+  if (!selection || !object) {
+    return (
+      <p className="text-[0.9375rem] text-secondary">
+        {mayChange
+          ? 'Drag the tip of a wall, or choose a line, a zone or a piezometer to see its numbers.'
+          : 'Choose a line, a zone or a piezometer to see its numbers.'}
+      </p>
+    );
+  }
+  const name = describeObject(selection.kind, selection.index, object).replace(/^\w+ “(.*)”$/, '$1');
   return (
-    <div
-      className="absolute z-10 flex max-w-[34rem] flex-wrap items-center gap-x-2 gap-y-1 rounded-control border border-rule bg-paper/95 px-3 py-1.5 text-[0.9375rem]"
-      style={style}
-      aria-live={isDragging ? 'off' : 'polite'}
-    >
-      <strong className="font-semibold">
-        {describeObject(selection.kind, selection.index, object).replace(/^\w+ “(.*)”$/, '$1')}
-      </strong>
+    <div className="flex flex-wrap items-center gap-x-2 gap-y-1 text-[0.9375rem]">
+      <strong className="font-semibold">{name}</strong>
       <Sentence document={document} selection={selection} />
       <button
         type="button"
@@ -46,21 +37,6 @@ export function SelectedSentence({ camera }: { camera: Camera }) {
       </button>
     </div>
   );
-}
-
-/** A place on the object that leaves room beside it. */
-function anchorOf(document: SectionDocument, { kind, index }: Selection): Point {
-  if (kind === 'piezometers') return document.piezometers[index]!.at;
-  if (kind === 'structures') return middleOf(document.structures[index]!.base);
-  if (kind === 'zones') return middleOf(document.zones[index]!.outline);
-  const { path } = document[kind][index]!;
-  return kind === 'barriers' ? path.reduce((low, p) => (p[1] < low[1] ? p : low)) : middleOf(path);
-}
-
-function middleOf(points: readonly Point[]): Point {
-  const xs = points.map(([x]) => x);
-  const ys = points.map(([, y]) => y);
-  return [(Math.min(...xs) + Math.max(...xs)) / 2, Math.max(...ys)];
 }
 
 function Sentence({ document, selection }: { document: SectionDocument; selection: Selection }): ReactNode {
