@@ -25,13 +25,13 @@ function readArguments(argv: readonly string[]): Arguments | Problem {
       options: { situation: { type: 'string' }, fields: { type: 'string' } },
     });
     const [file, ...more] = positionals;
-    if (file === undefined) return problemOf('invalid-input', `Name a section document: ${usage}`);
+    if (file === undefined) return problemOf('invalid-input', `Name a section document: ${usage}.`);
     if (more.length > 0)
-      return problemOf('invalid-input', `One file at a time; “${more[0]}” is one too many: ${usage}`);
+      return problemOf('invalid-input', `One file at a time; “${more[0]}” is one too many: ${usage}.`);
     return { file, situation: values.situation, fields: values.fields };
   } catch (error) {
     if (!(error instanceof TypeError)) throw error;
-    return problemOf('invalid-input', `${error.message.split('.')[0]}. Usage: ${usage}`);
+    return problemOf('invalid-input', `${error.message.split('.')[0]}. Usage: ${usage}.`);
   }
 }
 

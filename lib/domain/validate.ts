@@ -1,4 +1,5 @@
 // The one door for section documents: whatever comes in, every problem comes back at once, each with its place.
+import { findJsonFault } from './find-json-fault';
 import type { Issue } from './issue';
 import { sectionLimits } from './limits';
 import type { SectionDocument } from './section';
@@ -57,7 +58,7 @@ export function parseSectionText(text: string): ReadOutcome {
     return readSection(JSON.parse(body));
   } catch (error) {
     if (!(error instanceof SyntaxError)) throw error;
-    return refuse('not-json', `This is not JSON${placeInText(body, error.message)}.`);
+    return refuse('not-json', `This is not JSON${placeInText(body)}.`);
   }
 }
 
@@ -65,12 +66,12 @@ function refuse(code: string, message: string): ReadOutcome {
   return { document: null, draft: null, issues: [{ code, severity: 'stop', pointer: '', message }] };
 }
 
-/** Says where the parser stopped; engines word the position differently, so only its number is used. */
-function placeInText(text: string, message: string): string {
+/** Says where the text stops being JSON. */
+function placeInText(text: string): string {
   if (text.trim() === '') return ': it is empty';
-  const position = /position (\d+)/.exec(message)?.[1];
-  if (position === undefined) return /end of/i.test(message) ? ': it ends too early' : '';
-  const before = text.slice(0, Number(position)).split('\n');
+  const fault = findJsonFault(text);
+  if (fault >= text.length) return ': it ends too early';
+  const before = text.slice(0, fault).split('\n');
   return `: something is wrong at line ${before.length}, column ${before.at(-1)!.length + 1}`;
 }
 
