@@ -107,7 +107,8 @@ class Analysis {
       if (answer instanceof Refusal)
         return { status: 'refused', problem: answer.problem, issues: this.issues };
       situations.push(answer.result);
-      if (this.options.withFields) fields.push(readFields(answer.solved, answer.reader.readFlowNet()));
+      if (this.options.withFields)
+        fields.push(readFields(answer.solved, answer.reader.readFlowNet(), this.options.effort === 'full'));
     }
     const result: ResultDocument = {
       format: 'underfall-result/1',
@@ -255,10 +256,9 @@ function measureErrors(levels: Found['levels'], reader: ResultReader): Found['er
   const last = levels.at(-1)!;
   const before = levels.at(-2);
   const scale = last.discharge || 1;
-  const change = before
-    ? Math.abs(last.discharge - before.discharge) / scale
-    : reader.estimateDischargeError();
-  const discharge = reader.isBracketed() ? (last.upper - last.lower) / 2 / scale : change;
+  const change = (): number =>
+    before ? Math.abs(last.discharge - before.discharge) / scale : reader.estimateDischargeError();
+  const discharge = reader.isBracketed() ? (last.upper - last.lower) / 2 / scale : change();
   const exitGradient =
     before?.exitGradient && last.exitGradient
       ? Math.abs(last.exitGradient - before.exitGradient) / last.exitGradient

@@ -6,6 +6,7 @@ import { headRange, type SolvedSituation } from './read-results';
 export function readFields(
   { situation, section, solution, stream }: SolvedSituation,
   net: FlowNet,
+  withGradients: boolean,
 ): SituationFields {
   const { mesh, conductivities, heads } = section;
   return {
@@ -15,7 +16,9 @@ export function readFields(
     elements: mesh.elements,
     elementMaterials: mesh.elementMaterials,
     heads,
-    cornerGradients: recoverGradients(mesh, conductivities, solution.heads),
+    cornerGradients: withGradients
+      ? recoverGradients(mesh, conductivities, solution.heads)
+      : new Float64Array(0),
     streamFunction: stream.values,
     equipotentials: toLines(traceLevels(mesh, heads, net.headLevels)),
     seepagePaths: stream.values

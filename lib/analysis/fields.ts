@@ -21,7 +21,7 @@ export interface SituationFields {
   readonly elementMaterials: Int32Array;
   /** Total head, m, per node. */
   readonly heads: Float64Array;
-  /** Recovered ∂h/∂x, ∂h/∂y per element corner, length 6 * elementCount (discontinuous across materials). */
+  /** Recovered ∂h/∂x, ∂h/∂y per element corner, length 6 * elementCount (discontinuous across materials); empty in a live answer. */
   readonly cornerGradients: Float64Array;
   /** Stream function per node, 0 … discharge; null where none exists. */
   readonly streamFunction: Float64Array | null;
