@@ -4,7 +4,7 @@ import { useScoreStore } from '@/components/editor/state/score-context';
 import { createAnalysisWorker } from '@/lib/analysis/run-in-browser';
 
 /** Rest after the last change before the full solve begins. */
-const rest = 450;
+const rest = 700;
 
 /**
  * Keeps the answer in step with the document: a live one at every change, a full one at rest. Each has a worker of its own, so that an edit
