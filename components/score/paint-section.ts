@@ -6,7 +6,8 @@ import { makePattern, textureOf } from './ground-textures';
 import { action, headBands, ink } from './palette';
 
 interface Scene {
-  readonly document: SectionDocument;
+  readonly zones: SectionDocument['zones'];
+  readonly materials: SectionDocument['materials'];
   readonly fields: SituationFields | null;
   readonly camera: Camera;
   /** Device pixels per CSS pixel. */
@@ -16,11 +17,11 @@ interface Scene {
 /** Paints the whole picture. */
 export function paintSection(
   context: CanvasRenderingContext2D,
-  { document, fields, camera, ratio }: Scene,
+  { zones, materials, fields, camera, ratio }: Scene,
 ): void {
   context.setTransform(1, 0, 0, 1, 0, 0);
   context.clearRect(0, 0, context.canvas.width, context.canvas.height);
-  paintGround(context, document, camera, ratio);
+  paintGround(context, { zones, materials }, camera, ratio);
   if (!fields) return;
   context.setTransform(ratio, 0, 0, ratio, 0, 0);
   context.globalCompositeOperation = 'multiply';
@@ -33,12 +34,12 @@ export function paintSection(
 
 function paintGround(
   context: CanvasRenderingContext2D,
-  document: SectionDocument,
+  { zones, materials }: Pick<SectionDocument, 'zones' | 'materials'>,
   camera: Camera,
   ratio: number,
 ): void {
-  for (const zone of document.zones) {
-    const index = document.materials.findIndex(({ id }) => id === zone.material);
+  for (const zone of zones) {
+    const index = materials.findIndex(({ id }) => id === zone.material);
     context.setTransform(ratio, 0, 0, ratio, 0, 0);
     context.beginPath();
     for (const ring of [zone.outline, ...(zone.holes ?? [])]) {
@@ -50,11 +51,7 @@ function paintGround(
     }
     // the pattern's tile is made in device pixels
     context.setTransform(1, 0, 0, 1, 0, 0);
-    context.fillStyle = makePattern(
-      context,
-      textureOf(document.materials[index]?.hatch, Math.max(0, index)),
-      ratio,
-    );
+    context.fillStyle = makePattern(context, textureOf(materials[index]?.hatch, Math.max(0, index)), ratio);
     context.fill('evenodd');
   }
 }

@@ -16,7 +16,7 @@ import { SectionStave } from './section-stave';
 import { SelectedSentence } from './selected-sentence';
 import { TableView } from './table/table-view';
 import { useAnswer } from './use-answer';
-import { extentOf, focusOf, useCamera } from './use-camera';
+import { extentOf, focusOf, isSameExtent, useCamera } from './use-camera';
 import { type KeepingActions, useKeeping } from './use-keeping';
 
 interface ScoreProps extends KeepingActions {
@@ -87,7 +87,7 @@ function Staves() {
   );
   // the frame stands still under a hand that drags
   const [held, setHeld] = useState(fresh);
-  if (!isDragging && held !== fresh) setHeld(fresh);
+  if (!isDragging && !isSameExtent(held, fresh)) setHeld(fresh);
   const view = useCamera(container, held, focusOf(document));
   useWheelZoom(container, view.zoom);
   return (

@@ -10,7 +10,9 @@ import type { CameraHandle } from './use-camera';
 
 /** The top stave: ground, water, walls and the live flow net, in true scale. */
 export function SectionStave({ view, hairline }: { view: CameraHandle; hairline: number | null }) {
-  const document = useScore((state) => state.document);
+  // the parts that are painted keep their identity while others change: a wall that moves repaints with its answer, not before
+  const zones = useScore((state) => state.document.zones);
+  const materials = useScore((state) => state.document.materials);
   const answer = useScore((state) => state.answer);
   const isRefused = useScore((state) => state.refusal !== null && state.refusal.document === state.document);
   const situationId = useScore((state) => state.situationId);
@@ -29,9 +31,9 @@ export function SectionStave({ view, hairline }: { view: CameraHandle; hairline:
     element.width = Math.round(camera.width * ratio);
     element.height = Math.round(camera.height * ratio);
     // fields of a section that no longer stands would be numbers for other inputs
-    paintSection(context, { document, fields: isRefused ? null : fields, camera, ratio });
+    paintSection(context, { zones, materials, fields: isRefused ? null : fields, camera, ratio });
     performance.mark('underfall:drawn');
-  }, [camera, document, fields, isRefused]);
+  }, [camera, zones, materials, fields, isRefused]);
 
   const drag = useRef<{ x: number; y: number } | null>(null);
   return (

@@ -22,6 +22,11 @@ export function extentOf(document: SectionDocument, situation: Situation | undef
   return { xMin: xMin - 0.4 * air, xMax: xMax + 0.4 * air, yMin: yMin - air / 2, yMax: yMax + air };
 }
 
+/** Whether two extents frame the same picture: then the view keeps its identity and nothing is painted anew. */
+export function isSameExtent(a: Extent, b: Extent): boolean {
+  return a.xMin === b.xMin && a.xMax === b.xMax && a.yMin === b.yMin && a.yMax === b.yMax;
+}
+
 export interface CameraHandle {
   readonly camera: Camera;
   zoom(factor: number, px?: number, py?: number): void;
