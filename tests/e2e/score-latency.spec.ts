@@ -4,6 +4,9 @@ import { expect, test } from './pages/test';
 /** A page that took this long would be broken, not slow: the figure itself is printed, not asserted. */
 const broken = 1000;
 
+// recording a trace takes pictures of the page between edits, which is work the page does not do for a person
+test.use({ trace: 'off' });
+
 test('100 edits: time from the key to the drawn answer', async ({ page }) => {
   test.setTimeout(180_000);
   const score = new ScorePage(page);
