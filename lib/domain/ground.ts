@@ -51,13 +51,18 @@ export function createGround(document: Pick<SectionDocument, 'zones'>): Ground {
   const segments = document.zones.flatMap((zone) =>
     [zone.outline, ...(zone.holes ?? [])].flatMap(ringSegments),
   );
+  const boxes = segments.map(([a, b]) => boxOf(a, b));
   const isIn = (x: number, y: number): boolean => document.zones.some((zone) => isInZone(zone, x, y));
   return {
     size,
     snap,
     bounds,
     isInside: (x, y) => isIn(x, y) || segments.some(([a, b]) => distanceToSegment(x, y, a, b) <= snap),
-    along: (from, to) => cutAlong(from, to, segments, snap, isIn),
+    along: (from, to) => {
+      const reach = boxOf(from, to);
+      const near = segments.filter((_, i) => doBoxesMeet(reach, boxes[i]!, 2 * snap));
+      return cutAlong(from, to, near, snap, isIn);
+    },
   };
 }
 
@@ -133,10 +138,23 @@ export function ringArea(ring: readonly Point[]): number {
  */
 export function isInRing(ring: readonly Point[], x: number, y: number): boolean {
   let inside = false;
-  for (const [a, b] of ringSegments(ring)) {
+  for (let i = 0, j = ring.length - 1; i < ring.length; j = i++) {
+    const a = ring[j]!;
+    const b = ring[i]!;
     if (a[1] > y !== b[1] > y && x < a[0] + ((y - a[1]) / (b[1] - a[1])) * (b[0] - a[0])) inside = !inside;
   }
   return inside;
+}
+
+/** Left, bottom, right, top of a segment. */
+type Box = readonly [number, number, number, number];
+
+function boxOf([ax, ay]: Point, [bx, by]: Point): Box {
+  return [Math.min(ax, bx), Math.min(ay, by), Math.max(ax, bx), Math.max(ay, by)];
+}
+
+function doBoxesMeet(a: Box, b: Box, slack: number): boolean {
+  return a[0] <= b[2] + slack && b[0] <= a[2] + slack && a[1] <= b[3] + slack && b[1] <= a[3] + slack;
 }
 
 function isInZone(zone: Pick<Zone, 'outline' | 'holes'>, x: number, y: number): boolean {

@@ -109,6 +109,11 @@ function perimeter(ring: readonly Point[]): number {
   return ringSegments(ring).reduce((sum, [a, b]) => sum + Math.hypot(b[0] - a[0], b[1] - a[1]), 0);
 }
 
+/** Twice the signed area of a triangle, positive anticlockwise. */
+function orient(p: Point, q: Point, r: Point): number {
+  return (q[0] - p[0]) * (r[1] - p[1]) - (r[0] - p[0]) * (q[1] - p[1]);
+}
+
 /** Where two segments of a ring meet when they must not; neighbours may share their end but not turn back on each other. */
 function crossing(
   [a, b]: [Point, Point],
@@ -116,13 +121,11 @@ function crossing(
   isNeighbour: boolean,
   snap: number,
 ): Point | null {
-  const orient = (p: Point, q: Point, r: Point): number =>
-    (q[0] - p[0]) * (r[1] - p[1]) - (r[0] - p[0]) * (q[1] - p[1]);
+  if (isNeighbour) return null;
   const o1 = orient(a, b, c);
   const o2 = orient(a, b, d);
   const o3 = orient(c, d, a);
   const o4 = orient(c, d, b);
-  if (isNeighbour) return null;
   if (o1 > 0 !== o2 > 0 && o3 > 0 !== o4 > 0 && o1 !== o2 && o3 !== o4 && o1 * o2 < 0 && o3 * o4 < 0) {
     const t = o3 / (o3 - o4);
     const place: Point = [a[0] + t * (b[0] - a[0]), a[1] + t * (b[1] - a[1])];
