@@ -61,7 +61,7 @@ function main(): void {
   if (typeof text !== 'string') return refuse(text);
   const read = parseSectionText(text);
   if (!read.document) return refuse(problemOfIssues(read.issues));
-  const outcome = analyzeSection(read.document, {
+  const outcome = analyzeSection(read.source, {
     ...(args.situation === undefined ? {} : { situations: [args.situation] }),
     criteria: exampleCriteria,
     effort: 'full',
@@ -82,11 +82,7 @@ function main(): void {
       );
     }
   }
-  // notes of the reading (unknown fields) are lost when the parsed document is analyzed again: they come first
-  const known = new Set(outcome.result.notes.map((note) => note.message));
-  const extra = read.issues.filter((issue) => !known.has(issue.message));
-  const result = { ...outcome.result, notes: [...extra, ...outcome.result.notes] };
-  process.stdout.write(`${JSON.stringify(result, null, 2)}\n`);
+  process.stdout.write(`${JSON.stringify(outcome.result, null, 2)}\n`);
 }
 
 // a reader that closes the pipe early (head, less) is no error of ours

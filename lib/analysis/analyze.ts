@@ -7,7 +7,7 @@ import type { Issue } from '@/lib/domain/issue';
 import type { Problem } from '@/lib/domain/problem';
 import type { ResultDocument, ResultNote, SituationResult } from '@/lib/domain/result';
 import type { SectionDocument, Situation } from '@/lib/domain/section';
-import { readSection } from '@/lib/domain/validate';
+import { type ReadOutcome, readSection } from '@/lib/domain/validate';
 import { errorRow } from '@/lib/errors';
 import { AnalysisMemory, type MeshedSection } from './analysis-memory';
 import { buildConditions, buildMedium } from './build-problem';
@@ -58,7 +58,7 @@ export function analyzeSection(value: unknown, options: AnalyzeOptions): Analysi
       return { status: 'refused', problem: outcome.problem, issues: read.issues };
     jobs.push({ situation, conditions: outcome.conditions });
   }
-  return new Analysis(document, read.issues, options).run(jobs);
+  return new Analysis(document, read, options).run(jobs);
 }
 
 interface SituationJob {
@@ -90,11 +90,11 @@ class Analysis {
 
   constructor(
     private readonly document: SectionDocument,
-    private readonly issues: Issue[],
+    private readonly read: ReadOutcome,
     private readonly options: AnalyzeOptions,
   ) {
     this.memory = options.memory ?? new AnalysisMemory();
-    this.notes = [...issues];
+    this.notes = [...read.issues];
     this.began = options.now();
   }
 
@@ -105,7 +105,7 @@ class Analysis {
       const answer = this.solveSituation(job);
       if (answer === 'cancelled') return { status: 'cancelled' };
       if (answer instanceof Refusal)
-        return { status: 'refused', problem: answer.problem, issues: this.issues };
+        return { status: 'refused', problem: answer.problem, issues: this.read.issues };
       situations.push(answer.result);
       if (this.options.withFields)
         fields.push(readFields(answer.solved, answer.reader.readFlowNet(), this.options.effort === 'full'));
@@ -113,7 +113,7 @@ class Analysis {
     const result: ResultDocument = {
       format: 'underfall-result/1',
       solver: { name: 'underfall', version: engineVersion },
-      section: { sha256: sectionHash(this.document) },
+      section: { sha256: sectionHash(this.read.source) },
       situations,
       notes: this.notes.map(toNote),
     };

@@ -9,6 +9,9 @@ export function problemOf(code: ErrorCode, detail: string, errors: Problem['erro
   return { type: `/problems/${code}`, title, status, detail, errors };
 }
 
+/** Findings about the text itself, which is then no section document at all. */
+const kinds: Record<string, ErrorCode> = { 'not-json': 'invalid-input', 'too-large': 'too-large' };
+
 /** Makes the problem document of a section that does not stand: every stop with its pointer. */
 export function problemOfIssues(issues: readonly Issue[]): Problem {
   const stops = issues.filter((issue) => issue.severity === 'stop');
@@ -17,7 +20,7 @@ export function problemOfIssues(issues: readonly Issue[]): Problem {
       ? stops[0]!.message
       : `${stops.length} things need mending; the first: ${stops[0]!.message}`;
   return problemOf(
-    'invalid-section',
+    kinds[stops[0]?.code ?? ''] ?? 'invalid-section',
     detail,
     stops.map(({ pointer, message }) => ({ pointer, detail: message })),
   );

@@ -16,6 +16,8 @@ export const sectionLimits = {
   pathPoints: 1000,
   /** Points of the whole document. */
   totalPoints: 8000,
+  /** Lists and objects within one another; the format itself needs six. */
+  depth: 32,
   /** Characters of a name or title. */
   name: 200,
   /** Characters of a question, a source, a note. */

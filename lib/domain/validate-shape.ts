@@ -2,6 +2,7 @@
 import type { z } from 'zod';
 import { describeObject, pointerTo } from './describe';
 import type { Issue } from './issue';
+import { sectionLimits } from './limits';
 import { type SectionDocument, sectionSchema } from './section';
 
 /** The document where its shape is right, and what is wrong where it is not. */
@@ -22,9 +23,25 @@ export function readShape(value: unknown): ShapeOutcome {
     const message = `A section document is a JSON object with format, title, materials, zones, edges and situations; this is ${found}.`;
     return { document: null, issues: [{ code: 'not-an-object', severity: 'stop', pointer: '', message }] };
   }
+  if (isTooDeep(value)) {
+    const message = `The document has lists or objects nested more than ${sectionLimits.depth} deep; a section document never needs that.`;
+    return { document: null, issues: [{ code: 'too-deep', severity: 'stop', pointer: '', message }] };
+  }
   const parsed = sectionSchema.safeParse(value);
   if (parsed.success) return { document: parsed.data, issues: unknownFields(value, parsed.data, []) };
   return { document: null, issues: parsed.error.issues.flatMap((issue) => wordIssue(value, issue)) };
+}
+
+/** Whether a value is nested deeper than whatever walks it later could follow. */
+function isTooDeep(root: unknown): boolean {
+  let layer: unknown[] = [root];
+  for (let depth = 0; layer.length > 0; depth++) {
+    if (depth > sectionLimits.depth) return true;
+    layer = layer.flatMap((value) =>
+      typeof value === 'object' && value !== null ? Object.values(value) : [],
+    );
+  }
+  return false;
 }
 
 type ZodIssue = z.core.$ZodIssue;

@@ -187,6 +187,20 @@ describe('reading a section document', () => {
     ]);
   });
 
+  it('refuses what is nested deeper than anything could walk', () => {
+    let nested: unknown = 1;
+    for (let i = 0; i < 100_000; i++) nested = [nested];
+    const { document, issues } = readSection({ ...good, note: nested });
+    expect(document).toBeNull();
+    expect(issues.map(({ code }) => code)).toEqual(['too-deep']);
+  });
+
+  it('gives back what was sent beside what was read', () => {
+    const sent = { ...good, colour: 'blue' };
+    expect(readSection(sent).source).toBe(sent);
+    expect(readSection(sent).document).toMatchObject({ drains: [], structures: [] });
+  });
+
   it.each(['', 'null', '[]', '7', '{', '{"format":', '\uFEFF{}'])('never throws: %j', (text) => {
     expect(parseSectionText(text).document).toBeNull();
   });

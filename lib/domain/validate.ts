@@ -15,6 +15,8 @@ export interface ReadOutcome {
   /** The document where its shape alone is right, for screens that let an engineer go on editing. */
   readonly draft: SectionDocument | null;
   readonly issues: Issue[];
+  /** What was read, before defaults were filled in and unknown fields left out: the hash in a result is of this. */
+  readonly source: unknown;
 }
 
 /**
@@ -25,7 +27,7 @@ export interface ReadOutcome {
  */
 export function readSection(value: unknown): ReadOutcome {
   const shape = readShape(value);
-  if (!shape.document) return { document: null, draft: null, issues: shape.issues };
+  if (!shape.document) return { document: null, draft: null, issues: shape.issues, source: value };
   const document = shape.document;
   const issues = [
     ...shape.issues,
@@ -39,6 +41,7 @@ export function readSection(value: unknown): ReadOutcome {
     document: issues.some((issue) => issue.severity === 'stop') ? null : document,
     draft: document,
     issues,
+    source: value,
   };
 }
 
@@ -63,7 +66,8 @@ export function parseSectionText(text: string): ReadOutcome {
 }
 
 function refuse(code: string, message: string): ReadOutcome {
-  return { document: null, draft: null, issues: [{ code, severity: 'stop', pointer: '', message }] };
+  const issues: Issue[] = [{ code, severity: 'stop', pointer: '', message }];
+  return { document: null, draft: null, issues, source: undefined };
 }
 
 /** Says where the text stops being JSON. */

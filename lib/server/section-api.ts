@@ -29,8 +29,13 @@ function requireVersion(request: Request, current: () => Promise<number>): Promi
 
 /** A document that stands: the API keeps and solves nothing that has a stop in it. */
 async function readDocument(request: Request): Promise<SectionDocument> {
-  const { document, issues } = parseSectionText(await readJsonText(request, sectionLimits.bytes));
-  if (document) return document;
+  return (await readBody(request)).document;
+}
+
+/** The document and, for its hash, the same as it was sent. */
+async function readBody(request: Request): Promise<{ document: SectionDocument; source: unknown }> {
+  const { document, issues, source } = parseSectionText(await readJsonText(request, sectionLimits.bytes));
+  if (document) return { document, source };
   const stops = issues.filter(({ severity }) => severity === 'stop');
   const errors = stops.map(({ pointer, message }) => ({ pointer, detail: message }));
   if (stops[0]?.code === 'not-json')
@@ -115,11 +120,11 @@ export async function getProjects({ actor }: RouteCall): Promise<Response> {
 
 /** Solves a document that need not be kept; the answer is held against the practice's criteria. */
 export async function postSolve({ request, actor, query }: RouteCall): Promise<Response> {
-  const document = await readDocument(request);
+  const { source } = await readBody(request);
   const situations = query.getAll('situation');
   const outcome = await solveInPool(
     {
-      document,
+      document: source,
       criteria: await listCriteriaInEffect(actor),
       effort: 'full',
       ...(situations.length > 0 ? { situations } : {}),
