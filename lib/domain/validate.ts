@@ -2,6 +2,7 @@
 import { findJsonFault } from './find-json-fault';
 import type { Issue } from './issue';
 import { sectionLimits } from './limits';
+import { lintSection } from './lint/lint-section';
 import type { SectionDocument } from './section';
 import { checkConditions } from './validate-conditions';
 import { checkGeometry } from './validate-geometry';
@@ -37,12 +38,9 @@ export function readSection(value: unknown): ReadOutcome {
   ];
   if (!issues.some((issue) => issue.severity === 'stop' && issue.code !== 'unknown-level'))
     issues.push(...checkConditions(document));
-  return {
-    document: issues.some((issue) => issue.severity === 'stop') ? null : document,
-    draft: document,
-    issues,
-    source: value,
-  };
+  const isSound = !issues.some((issue) => issue.severity === 'stop');
+  if (isSound) issues.push(...lintSection(document));
+  return { document: isSound ? document : null, draft: document, issues, source: value };
 }
 
 /**

@@ -30,15 +30,15 @@ describe('moving points', () => {
 
   it('moves a shared corner of two zones together', () => {
     const draft = structuredClone(wall);
-    moveCorner(draft, [36, -5], [36, -4.2]);
-    const moved = draft.zones.flatMap(({ outline }) => outline).filter(([x, y]) => x === 36 && y === -4.2);
+    moveCorner(draft, [52, -5], [52, -4.2]);
+    const moved = draft.zones.flatMap(({ outline }) => outline).filter(([x, y]) => x === 52 && y === -4.2);
     expect(moved).toHaveLength(2);
   });
 
   it('moves the edge that ends on a corner', () => {
     const draft = structuredClone(wall);
-    moveCorner(draft, [36, 0], [36, 0.5]);
-    expect(draft.edges.find(({ id }) => id === 'bed')!.path.at(-1)).toEqual([36, 0.5]);
+    moveCorner(draft, [52, 0], [52, 0.5]);
+    expect(draft.edges.find(({ id }) => id === 'bed')!.path.at(-1)).toEqual([52, 0.5]);
   });
 
   it('keeps an upright wall upright and its tip below its top', () => {

@@ -41,14 +41,14 @@ export const apronWithCutoffs: SectionInput = {
       name: 'Alluvium',
       material: 'alluvium',
       outline: [
-        [-60, -18],
-        [84, -18],
-        [84, 0],
+        [-82, -18],
+        [106, -18],
+        [106, 0],
         [24, 0],
         [24, -1],
         [0, -1],
         [0, 0],
-        [-60, 0],
+        [-82, 0],
       ],
     },
     {
@@ -88,7 +88,7 @@ export const apronWithCutoffs: SectionInput = {
       id: 'upstream',
       name: 'Reservoir bed',
       path: [
-        [-60, 0],
+        [-82, 0],
         [0, 0],
       ],
       condition: { type: 'water', level: 'headwater' },
@@ -98,7 +98,7 @@ export const apronWithCutoffs: SectionInput = {
       name: 'River bed',
       path: [
         [24, 0],
-        [84, 0],
+        [106, 0],
       ],
       condition: { type: 'water', level: 'tailwater' },
     },

@@ -30,10 +30,10 @@ export const wallInGround: SectionInput = {
       name: 'Upper sand',
       material: 'sand',
       outline: [
-        [-36, -5],
-        [36, -5],
-        [36, 0],
-        [-36, 0],
+        [-52, -5],
+        [52, -5],
+        [52, 0],
+        [-52, 0],
       ],
     },
     {
@@ -41,10 +41,10 @@ export const wallInGround: SectionInput = {
       name: 'Lower gravelly sand',
       material: 'gravelly-sand',
       outline: [
-        [-36, -12],
-        [36, -12],
-        [36, -5],
-        [-36, -5],
+        [-52, -12],
+        [52, -12],
+        [52, -5],
+        [-52, -5],
       ],
     },
   ],
@@ -64,7 +64,7 @@ export const wallInGround: SectionInput = {
       id: 'riverbed',
       name: 'River bed',
       path: [
-        [-36, 0],
+        [-52, 0],
         [0, 0],
       ],
       condition: { type: 'water', level: 'river' },
@@ -74,7 +74,7 @@ export const wallInGround: SectionInput = {
       name: 'Dredged bed',
       path: [
         [0, 0],
-        [36, 0],
+        [52, 0],
       ],
       condition: { type: 'water', level: 'basin' },
     },
