@@ -290,4 +290,22 @@ describe('whatever the section', () => {
       expectClose(solve(isotropic).discharge.value, before.discharge.value, meshNoise);
     });
   });
+
+  it('the two permeabilities swapped under a wall in one soil: the same discharge', () => {
+    forAll((section, _before, { ratio }) => {
+      // level ground without end: the sides lie three times the thickness away in either of the two
+      const X = 3 * Math.sqrt(ratio) * -section.zones[0]!.outline[0]![1];
+      const uniform = (isSwapped: boolean) =>
+        edit(section, (d) => {
+          const widen = (points: [number, number][]): void =>
+            points.forEach((p) => (p[0] = Math.sign(p[0]) * X));
+          d.zones.forEach(({ outline }) => widen(outline));
+          d.edges!.forEach(({ path }) => widen(path));
+          d.piezometers = [];
+          const { kMajor, kMinor } = d.materials[0]!;
+          d.materials.forEach((m) => Object.assign(m, { kMajor, kMinor, angle: isSwapped ? 90 : 0 }));
+        });
+      expectClose(solve(uniform(true)).discharge.value, solve(uniform(false)).discharge.value, meshNoise);
+    });
+  });
 });
